@@ -1,0 +1,32 @@
+using System.CommandLine;
+using System.CommandLine.Help;
+using StarLines.Cli.Commands;
+
+namespace StarLines.Cli;
+
+/// <summary>All commands of the program.</summary>
+internal static class CommandTree
+{
+    private const string Description =
+        "Measures stellar spectra: continuum, equivalent widths, line profiles and radial velocities.";
+
+    /// <summary>Makes the tree.</summary>
+    /// <param name="terminal">Where the commands write.</param>
+    public static RootCommand Create(Terminal terminal)
+    {
+        var root = new RootCommand(Description)
+        {
+            CompletionCommand.Create(terminal),
+        };
+        foreach (Option option in root.Options)
+        {
+            if (option is HelpOption { Action: HelpAction help } asked)
+            {
+                help.MaxWidth = terminal.Width;
+                asked.Action = new HelpWithExample(help);
+            }
+        }
+
+        return root;
+    }
+}

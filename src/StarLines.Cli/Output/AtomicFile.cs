@@ -1,0 +1,33 @@
+using System;
+using System.IO;
+
+namespace StarLines.Cli.Output;
+
+/// <summary>Writes a file beside its place and moves it there when it is whole, so that nobody meets half a file.</summary>
+internal static class AtomicFile
+{
+    /// <summary>Writes a file; folders on the way are made.</summary>
+    /// <param name="path">Where the file shall stand; an old one is replaced.</param>
+    /// <param name="write">Writes the content.</param>
+    public static void Write(string path, Action<Stream> write)
+    {
+        string full = Path.GetFullPath(path);
+        string folder = Path.GetDirectoryName(full)!;
+        Directory.CreateDirectory(folder);
+        string beside = Path.Combine(folder, $".{Path.GetFileName(full)}.{Environment.ProcessId}.part");
+        try
+        {
+            using (FileStream stream = File.Create(beside))
+            {
+                write(stream);
+            }
+
+            File.Move(beside, full, overwrite: true);
+        }
+        catch
+        {
+            File.Delete(beside);
+            throw;
+        }
+    }
+}
