@@ -161,13 +161,17 @@ public sealed class TableColumn
     /// <summary>The same column under another name.</summary>
     /// <param name="name">The name.</param>
     /// <returns>A new column that shares the values.</returns>
-    public TableColumn Renamed(string name) => new(name, Type, _values)
+    public TableColumn Renamed(string name) =>
+        new TableColumn(name, Type, _values).Noted(Unit, Description, Ucd, Decimals, SignificantDigits);
+
+    /// <summary>The same values with other notes.</summary>
+    internal TableColumn Noted(string unit, string description, string ucd, int? decimals, int? significantDigits) => new(Name, Type, _values)
     {
-        Unit = Unit,
-        Description = Description,
-        Ucd = Ucd,
-        Decimals = Decimals,
-        SignificantDigits = SignificantDigits,
+        Unit = unit,
+        Description = description,
+        Ucd = ucd,
+        Decimals = decimals,
+        SignificantDigits = significantDigits,
     };
 
     /// <summary>Makes a column of rows already in an array that nobody else holds.</summary>
@@ -198,13 +202,7 @@ public sealed class TableColumn
         }
 
         return new TableColumn(first.Name, first.Type, values)
-        {
-            Unit = first.Unit,
-            Description = first.Description,
-            Ucd = first.Ucd,
-            Decimals = first.Decimals,
-            SignificantDigits = first.SignificantDigits,
-        };
+            .Noted(first.Unit, first.Description, first.Ucd, first.Decimals, first.SignificantDigits);
     }
 
     private static T?[] ToNullable<T>(ReadOnlySpan<T> values)

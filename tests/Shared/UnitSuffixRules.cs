@@ -25,6 +25,7 @@ public sealed class UnitSuffixRules
         ["None"] = "Measured.None, no value at all",
         ["FwhmPerSigma"] = "a ratio",
         ["Values"] = "the holder states the unit",
+        ["Doubles"] = "TableColumn.Unit",
         ["Uncertainty"] = "in the unit of its value",
         ["Flux"] = "Spectrum.FluxUnit",
         ["Sigma"] = "standard deviations of a flux, Spectrum.FluxUnit",
