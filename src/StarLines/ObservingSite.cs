@@ -1,4 +1,5 @@
 using System;
+using StarLines.Velocities.Barycentre;
 
 namespace StarLines;
 
@@ -21,6 +22,18 @@ public sealed record ObservingSite
         LatitudeDegrees = latitudeDegrees;
         LongitudeDegrees = longitudeDegrees;
         HeightMetres = heightMetres;
+    }
+
+    /// <summary>Makes a site of geocentric coordinates fixed to the Earth, as the FITS keywords OBSGEO-X, -Y, -Z give them.</summary>
+    /// <param name="name">Its name, or an empty string.</param>
+    /// <param name="xMetres">Towards longitude 0 on the equator, metres.</param>
+    /// <param name="yMetres">Towards longitude 90° east on the equator, metres.</param>
+    /// <param name="zMetres">Towards the north pole, metres.</param>
+    /// <exception cref="ArgumentException">The place is more than 1 km below or 100 km above the surface.</exception>
+    public static ObservingSite FromGeocentric(string name, double xMetres, double yMetres, double zMetres)
+    {
+        (double latitude, double longitude, double height) = Geodesy.ToGeodetic(new Vector3(xMetres, yMetres, zMetres));
+        return new ObservingSite(name, latitude, longitude, height);
     }
 
     /// <summary>The name, or an empty string.</summary>
