@@ -46,6 +46,8 @@ public sealed class UnitSuffixRules
         ["ReducedChiSquare"] = "a ratio",
         ["SignalToNoise"] = "a ratio",
         ["ResolvingPower"] = "a ratio, λ/FWHM",
+        ["Scale"] = "the factor between stored and true values of a FITS file, a ratio",
+        ["Zero"] = "the offset of the true values of a FITS file, in their own unit",
         ["PeakHeight"] = "a correlation, −1 to 1",
         ["RValue"] = "a ratio (Tonry and Davis 1979)",
     };
