@@ -1,6 +1,7 @@
 using System.CommandLine;
 using System.CommandLine.Help;
 using StarLines.Cli.Commands;
+using StarLines.Cli.Options;
 
 namespace StarLines.Cli;
 
@@ -18,6 +19,7 @@ internal static class CommandTree
         {
             CompletionCommand.Create(terminal),
         };
+        new CommonOptions().AddTo(root);
         foreach (Option option in root.Options)
         {
             if (option is HelpOption { Action: HelpAction help } asked)

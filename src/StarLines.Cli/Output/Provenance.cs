@@ -1,0 +1,99 @@
+using System;
+using System.Buffers;
+using System.Collections.Generic;
+using System.Globalization;
+using System.IO;
+using System.Reflection;
+using System.Security.Cryptography;
+using StarLines.LineLists;
+using StarLines.Tables;
+
+namespace StarLines.Cli.Output;
+
+/// <summary>What every table says about its making: program, command line, date, inputs and line lists.</summary>
+internal sealed class Provenance
+{
+    /// <summary>Fixes the date for builds that must give the same bytes twice (a convention of reproducible builds).</summary>
+    private const string DateVariable = "SOURCE_DATE_EPOCH";
+
+    /// <summary>Characters that no shell takes for its own.</summary>
+    private static readonly SearchValues<char> PlainCharacters =
+        SearchValues.Create("ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789-+_./,:=@%");
+
+    private readonly List<(string Name, string Sha256)> _inputs = [];
+    private readonly List<(string Name, string Sha256)> _lists = [];
+    private readonly string _commandLine;
+
+    /// <summary>Begins with a command line.</summary>
+    /// <param name="words">The words after the program's name.</param>
+    public Provenance(IReadOnlyList<string> words)
+    {
+        var quoted = new List<string>(words.Count + 1) { "starlines" };
+        foreach (string word in words)
+        {
+            quoted.Add(NeedsQuotes(word) ? "'" + word.Replace("'", "'\\''", StringComparison.Ordinal) + "'" : word);
+        }
+
+        _commandLine = string.Join(' ', quoted);
+    }
+
+    /// <summary>Version of the program.</summary>
+    public static string Version { get; } =
+        typeof(Provenance).Assembly.GetCustomAttribute<AssemblyInformationalVersionAttribute>()!.InformationalVersion;
+
+    /// <summary>Adds a file that was read; anything that is no file, such as standard input, is named alone.</summary>
+    public void AddInput(string name, string path)
+    {
+        if (File.Exists(path))
+        {
+            using FileStream stream = File.OpenRead(path);
+            _inputs.Add((name, Convert.ToHexStringLower(SHA256.HashData(stream))));
+        }
+        else
+        {
+            _inputs.Add((name, ""));
+        }
+    }
+
+    /// <summary>Adds a line list that was used.</summary>
+    public void AddList(LineList list) => _lists.Add((list.Name, list.Sha256));
+
+    /// <summary>Writes everything into the metadata of a table.</summary>
+    public void WriteTo(TableMetadata metadata)
+    {
+        metadata["program"] = "StarLines " + Version;
+        metadata["command_line"] = _commandLine;
+        metadata["date_utc"] = Now().ToString("yyyy-MM-dd'T'HH:mm:ss'Z'", CultureInfo.InvariantCulture);
+        if (_inputs.Count != 0)
+        {
+            metadata["inputs"] = MetadataValue.FromList(_inputs.ConvertAll(static input => Entry("file", input)));
+        }
+
+        if (_lists.Count != 0)
+        {
+            metadata["line_lists"] = MetadataValue.FromList(_lists.ConvertAll(static list => Entry("name", list)));
+        }
+    }
+
+    private static DateTime Now()
+    {
+        string? fixedSeconds = Environment.GetEnvironmentVariable(DateVariable);
+        return long.TryParse(fixedSeconds, NumberStyles.None, CultureInfo.InvariantCulture, out long seconds)
+            ? DateTimeOffset.FromUnixTimeSeconds(seconds).UtcDateTime
+            : DateTime.UtcNow;
+    }
+
+    private static MetadataValue Entry(string key, (string Name, string Sha256) item)
+    {
+        var entry = new TableMetadata { [key] = item.Name };
+        if (item.Sha256.Length != 0)
+        {
+            entry["sha256"] = item.Sha256;
+        }
+
+        return entry;
+    }
+
+    private static bool NeedsQuotes(string word) =>
+        word.Length == 0 || word.AsSpan().IndexOfAnyExcept(PlainCharacters) >= 0;
+}

@@ -1,0 +1,48 @@
+using System;
+using SkiaSharp;
+
+namespace StarLines.Plotting.Drawing;
+
+/// <summary>Points with error bars; those that are not used are open circles.</summary>
+internal sealed class ErrorPoints(string name, double[] x, double[] y, double[] sigma, bool[] used) : PanelItem(name)
+{
+    internal double[] X { get; } = x;
+
+    internal double[] Y { get; } = y;
+
+    /// <summary>One standard deviation a point, or none.</summary>
+    internal double[] Sigma { get; } = sigma;
+
+    /// <summary>Whether a point was used, or none where all were.</summary>
+    internal bool[] Used { get; } = used;
+
+    internal override LegendSample? Sample => new(Point: true);
+
+    internal override void Draw(PanelCanvas panel)
+    {
+        int first = Math.Max(0, Trace.LowerBound(X, panel.XRange.Minimum) - 1);
+        int end = Math.Min(X.Length, Trace.LowerBound(X, panel.XRange.Maximum) + 1);
+        float pitch = (panel.X(X[Math.Max(first, end - 1)]) - panel.X(X[Math.Min(first, X.Length - 1)])) / Math.Max(1, end - first - 1);
+        float radius = Math.Clamp(0.28f * pitch, 0.9f, 2.2f);
+        using SKPaint bar = new Pen(Ink.Faded, 0.8f).Paint(panel.Palette);
+        using SKPaint fill = new() { Color = panel.Palette[Ink.Data], IsAntialias = true };
+        using SKPaint ring = new Pen(Ink.Faded, 0.8f).Paint(panel.Palette);
+        for (int i = first; i < end; i++)
+        {
+            if (!double.IsFinite(Y[i]))
+            {
+                continue;
+            }
+
+            float px = panel.X(X[i]);
+            float py = panel.Y(Y[i]);
+            if (Sigma.Length != 0 && Sigma[i] > 0)
+            {
+                panel.Canvas.DrawLine(px, panel.Y(Y[i] - Sigma[i]), px, panel.Y(Y[i] + Sigma[i]), bar);
+            }
+
+            bool filled = Used.Length == 0 || Used[i];
+            panel.Canvas.DrawCircle(px, py, radius, filled ? fill : ring);
+        }
+    }
+}

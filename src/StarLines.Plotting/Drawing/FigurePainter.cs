@@ -1,0 +1,74 @@
+using System.Collections.Generic;
+using System.Linq;
+using ScottPlot;
+using SkiaSharp;
+
+namespace StarLines.Plotting.Drawing;
+
+/// <summary>Draws the content of a figure on a canvas.</summary>
+internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float textSize, float deviceScale)
+{
+    private const float Margin = 8f;
+
+    internal void Paint(FigureContent content, string title, float width, float height)
+    {
+        using (SKPaint ground = new() { Color = palette.Background })
+        {
+            canvas.DrawRect(new SKRect(0, 0, width, height), ground);
+        }
+
+        List<LegendEntry> legend = LegendEntry.Of(content.Cells.SelectMany(cell => cell.Panels).SelectMany(panel => panel.Items));
+        var area = new SKRect(Margin, Margin, width - Margin - (0.4f * textSize), height - (0.5f * Margin));
+        if (title.Length != 0 || legend.Count != 0)
+        {
+            var heading = new Heading(canvas, palette, textSize);
+            area.Top += heading.Draw(title, legend, area);
+        }
+
+        foreach (PlacedPanel placed in new PanelLayout(content, area, textSize).Place())
+        {
+            DrawPanel(placed);
+        }
+    }
+
+    private void DrawPanel(PlacedPanel placed)
+    {
+        using var plot = new Plot();
+        SKRect frame = placed.Frame;
+        plot.RenderManager.ClearCanvasBeforeEachRender = false;
+        plot.FigureBackground.Color = Colors.Transparent;
+        plot.DataBackground.Color = Colors.Transparent;
+        plot.HideGrid();
+        plot.Axes.SetLimits(placed.Panel.X.Minimum, placed.Panel.X.Maximum, placed.YAxis.Minimum, placed.YAxis.Maximum);
+        StyleAxis(plot.Axes.Bottom, placed.XTicks, placed.Panel.XLabel);
+        StyleAxis(plot.Axes.Left, placed.YTicks, placed.Panel.YLabel);
+        plot.Axes.FrameWidth(0.9f);
+        plot.Axes.FrameColor(Color.FromSKColor(palette[Ink.Axis]));
+        foreach (PanelItem item in placed.Panel.Items.Append(new FrameTicks(placed.XTicks.All, placed.YTicks.All)))
+        {
+            plot.PlottableList.Add(new PlotItem(item, placed.Panel.X, placed.YAxis, palette, textSize, deviceScale));
+        }
+
+        plot.Layout.Fixed(new PixelRect(frame.Left, frame.Right, frame.Bottom, frame.Top));
+        plot.Render(canvas, new PixelRect(0, frame.Right + 4, frame.Bottom + (4 * textSize), 0));
+    }
+
+    private void StyleAxis(IAxis axis, Ticks ticks, string label)
+    {
+        Color colour = Color.FromSKColor(palette[Ink.Axis]);
+        axis.TickGenerator = ticks;
+        axis.MajorTickStyle.Length = 0;
+        axis.MinorTickStyle.Length = 0;
+        foreach (LabelStyle style in (LabelStyle[])[axis.TickLabelStyle, axis.Label])
+        {
+            style.FontName = FigureFonts.Key;
+            style.FontSize = textSize;
+            style.Bold = false;
+            style.ForeColor = colour;
+            style.SubpixelText = true;
+        }
+
+        axis.Label.Text = label;
+        axis.Label.IsVisible = label.Length != 0;
+    }
+}

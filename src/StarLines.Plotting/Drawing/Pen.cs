@@ -1,0 +1,40 @@
+using SkiaSharp;
+
+namespace StarLines.Plotting.Drawing;
+
+/// <summary>How a line is dashed.</summary>
+internal enum Dash
+{
+    /// <summary>Unbroken.</summary>
+    Solid,
+
+    /// <summary>Long strokes.</summary>
+    Dashed,
+
+    /// <summary>Short strokes.</summary>
+    Dotted,
+}
+
+/// <summary>How a line is drawn; the width is in units of the figure, 1/96 inch.</summary>
+internal readonly record struct Pen(Ink Ink, float Width, Dash Dash = Dash.Solid)
+{
+    internal SKPaint Paint(Palette palette)
+    {
+        var paint = new SKPaint
+        {
+            Color = palette[Ink],
+            StrokeWidth = Width,
+            IsStroke = true,
+            IsAntialias = true,
+            StrokeJoin = SKStrokeJoin.Round,
+            StrokeCap = Dash == Dash.Dotted ? SKStrokeCap.Round : SKStrokeCap.Butt,
+        };
+        if (Dash != Dash.Solid)
+        {
+            float[] intervals = Dash == Dash.Dashed ? [5f, 3.5f] : [0.1f, 3f];
+            paint.PathEffect = SKPathEffect.CreateDash(intervals, 0);
+        }
+
+        return paint;
+    }
+}
