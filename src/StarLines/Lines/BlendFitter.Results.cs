@@ -6,6 +6,12 @@ namespace StarLines.Lines;
 /// <content>What a finished fit says of each line.</content>
 internal sealed partial class BlendFitter
 {
+    /// <summary>Separation at which the dip between two equal Gaussians vanishes: 2 σ (Sparrow 1916, ApJ 44, 76).</summary>
+    private const double SparrowLimitFwhm = 0.849;
+
+    /// <summary>Score of the wings from which the profile is called wrong; noise passes it in 5 of 10 000 lines.</summary>
+    private const double WingScoreBound = 3.5;
+
     private void Keep(LineTask[] tasks, double origin)
     {
         for (int i = 0; i < _count; i++)
@@ -22,6 +28,11 @@ internal sealed partial class BlendFitter
     private void Store(LineTask[] tasks, FitOutcome outcome, double origin, int first, int last)
     {
         Keep(tasks, origin);
+        foreach (int index in _dropped.AsSpan(0, _outliers))
+        {
+            _pixels.Drop(first + index);
+        }
+
         int used = UsedPixels();
 
         // The prior of the continuum counts as one more datum and the continuum as one more parameter.
@@ -47,7 +58,14 @@ internal sealed partial class BlendFitter
             }
 
             StoreUncertainties(task, i);
+            ReadOnlySpan<double> parameters = _parameters.AsSpan(0, _model.ParameterCount);
+            if (Math.Abs(_model.WingScore(i, task.Fwhm, parameters, _workspace.Covariance)) > WingScoreBound)
+            {
+                task.Warnings |= LineWarnings.PoorFit;
+            }
         }
+
+        NoteUnresolved(tasks);
     }
 
     private void StoreUncertainties(LineTask task, int line)
@@ -93,6 +111,20 @@ internal sealed partial class BlendFitter
                 + (2.0 * level * task.EquivalentWidth * withContinuum)
                 + (task.EquivalentWidth * task.EquivalentWidth * continuum)));
         task.ContinuumPosterior = Math.Sqrt(continuum);
+    }
+
+    private void NoteUnresolved(LineTask[] tasks)
+    {
+        for (int i = 1; i < _count; i++)
+        {
+            LineTask left = tasks[_fitted[i - 1]];
+            LineTask right = tasks[_fitted[i]];
+            if (right.Centre - left.Centre < SparrowLimitFwhm * Math.Max(left.Fwhm, right.Fwhm))
+            {
+                left.Warnings |= LineWarnings.Unresolved;
+                right.Warnings |= LineWarnings.Unresolved;
+            }
+        }
     }
 
     /// <summary>The bound of reduced χ² that noise alone passes in 3 of 100 000 fits (Wilson and Hilferty 1931, PNAS 17, 684).</summary>

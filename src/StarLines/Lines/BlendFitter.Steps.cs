@@ -75,13 +75,16 @@ internal sealed partial class BlendFitter
             _parameters[at + 1] = task.Centre - origin;
             _lower[at + 1] = task.Predicted - search - origin;
             _upper[at + 1] = task.Predicted + search - origin;
-            SetWidths(task, at + 2);
+            SetWidths(task, i, at + 2);
         }
     }
 
-    private void SetWidths(LineTask task, int at)
+    private void SetWidths(LineTask task, int line, int at)
     {
         int widths = _profile.WidthCount;
+        bool weak = Math.Abs(task.Significance) < WeakSignificance && !task.WidthHeld;
+        _profile.Begin(task.ExpectedFwhm, _parameters.AsSpan(at, widths));
+        _model.SetWidthPrior(line, _parameters[at], weak ? 1.0 / WidthPrior : 0.0);
         _profile.Begin(task.LeastFwhm, _lower.AsSpan(at, widths));
         _profile.Begin(GreatestWidthFactor * Math.Max(task.ExpectedFwhm, task.LeastFwhm), _upper.AsSpan(at, widths));
         if (task.Width > 0.0 && !task.WidthHeld)
@@ -91,7 +94,6 @@ internal sealed partial class BlendFitter
             return;
         }
 
-        _profile.Begin(task.ExpectedFwhm, _parameters.AsSpan(at, widths));
         _held.AsSpan(at, widths).Fill(task.WidthHeld);
     }
 
@@ -137,19 +139,33 @@ internal sealed partial class BlendFitter
         return LevenbergMarquardt.Minimize(_model, parameters, lower, upper, _held.AsSpan(0, size), _workspace);
     }
 
-    /// <summary>A width that runs into its bound is not determined by the data: the expected one is held instead.</summary>
-    private bool HoldWidthsAtBound(LineTask[] tasks)
+    /// <summary>
+    /// A strong line that runs into its greatest width starts again wider; any other width at a bound is not determined by the
+    /// data, and the expected one is held instead.
+    /// </summary>
+    private bool ChangeWidthsAtBound(LineTask[] tasks)
     {
         bool any = false;
         for (int i = 0; i < _count; i++)
         {
             LineTask task = tasks[_fitted[i]];
             int at = 3 + (i * _model.Stride);
-            if (!task.WidthHeld && _workspace.Fixed[at])
+            if (task.WidthHeld || !_workspace.Fixed[at])
+            {
+                continue;
+            }
+
+            any = true;
+            task.Width = 0.0;
+            if (_parameters[at] >= _upper[at] && task.Widenings < MostWidenings && AmplitudeSignificance(i) > WideningSignificance)
+            {
+                task.Widenings++;
+                task.ExpectedFwhm *= 0.75 * GreatestWidthFactor;
+            }
+            else
             {
                 task.WidthHeld = true;
                 task.Warnings |= LineWarnings.AtBound;
-                any = true;
             }
         }
 
@@ -208,20 +224,39 @@ internal sealed partial class BlendFitter
         return Math.Abs(_parameters[1 + (line * _model.Stride)]) / Math.Sqrt(unit[line + 1]);
     }
 
-    /// <summary>Drops the pixel that alone explains most of the excess χ²: a cosmic hit that nobody flagged.</summary>
-    private bool DropOutlier(FitOutcome outcome, int first)
+    /// <summary>
+    /// Drops the pixel without which χ² falls most, where that is most of the excess: a cosmic hit that nobody flagged.
+    /// Without pixel i the χ² of a linear fit falls by r²/(1 − h), h being its leverage.
+    /// </summary>
+    private bool DropOutlier(FitOutcome outcome)
     {
-        Span<double> residual = _model.Residual;
-        int worst = TensorPrimitives.IndexOfMaxMagnitude(residual);
-        double square = residual[worst] * residual[worst];
+        ReadOnlySpan<double> residual = _model.Residual;
         double excess = outcome.ChiSquare - (UsedPixels() - _model.ParameterCount + 1);
-        if (square < OutlierSigma * OutlierSigma || square < OutlierShare * excess)
+        if (excess < OutlierSigma * OutlierSigma)
+        {
+            return false;
+        }
+
+        int worst = 0;
+        double most = 0.0;
+        for (int i = 0; i < residual.Length; i++)
+        {
+            double leverage = Math.Min(_model.Leverage(i, _workspace.Covariance), MostLeverage);
+            double fall = residual[i] * residual[i] / (1.0 - leverage);
+            if (fall > most)
+            {
+                most = fall;
+                worst = i;
+            }
+        }
+
+        if (most < OutlierSigma * OutlierSigma || most < OutlierShare * excess)
         {
             return false;
         }
 
         _model.Weight[worst] = 0.0;
-        _pixels.Drop(first + worst);
+        _dropped[_outliers++] = worst;
         return true;
     }
 

@@ -26,10 +26,32 @@ internal sealed partial class BlendFitter
     private const double OutlierSigma = 5.0;
 
     /// <summary>Share of the excess χ² that a hit alone must explain; a wrong profile spreads it over more pixels.</summary>
-    private const double OutlierShare = 0.4;
+    private const double OutlierShare = 0.6;
+
+    /// <summary>Significance from which a line that wants to be wider than expected is believed.</summary>
+    private const double WideningSignificance = 10.0;
+
+    /// <summary>How often a line may widen beyond its bound in one fit.</summary>
+    private const int MostWidenings = 3;
+
+    /// <summary>
+    /// Significance below which the expected width counts as a datum, with an uncertainty of <see cref="WidthPrior"/>: a weak
+    /// line alone may else settle on a single pixel or on the whole window.
+    /// </summary>
+    private const double WeakSignificance = 12.0;
+
+    /// <summary>Uncertainty of the expected width of a weak line, in ln of the width: a factor of 1.6.</summary>
+    private const double WidthPrior = 0.5;
+
+    /// <summary>A pixel that the fit follows more closely than this cannot be judged.</summary>
+    private const double MostLeverage = 0.9;
 
     /// <summary>Pixels dropped from one window at most: a hit takes one to three.</summary>
     private const int MostOutliers = 4;
+
+    /// <summary>Warnings that a new fit decides anew.</summary>
+    private const LineWarnings OfTheFit =
+        LineWarnings.PoorFit | LineWarnings.AtBound | LineWarnings.NoConvergence | LineWarnings.Unresolved | LineWarnings.Blended;
 
     private readonly NormalizedPixels _pixels;
     private readonly LineMeasureOptions _options;
@@ -44,6 +66,8 @@ internal sealed partial class BlendFitter
     private double[] _own = [];
     private double[] _amplitudes = [];
     private int[] _fitted = [];
+    private readonly int[] _dropped = new int[MostOutliers];
+    private int _outliers;
     private int _count;
 
     internal BlendFitter(NormalizedPixels pixels, LineMeasureOptions options, ILineProfile profile)
@@ -63,8 +87,15 @@ internal sealed partial class BlendFitter
             ? Math.Max(tasks[reference].ContinuumSigma, LeastContinuumSigma)
             : LeastContinuumSigma;
         Grow(members.Length);
+        foreach (int member in members)
+        {
+            tasks[member].Warnings &= ~OfTheFit;
+            tasks[member].WidthHeld = false;
+            tasks[member].WindowFwhm = tasks[member].Fwhm;
+        }
+
         Load(tasks, members, first, last, origin);
-        int outliers = 0;
+        _outliers = 0;
         while (Collect(tasks, members) > 0)
         {
             _model.Arrange(_count, continuumSigma);
@@ -76,7 +107,7 @@ internal sealed partial class BlendFitter
             }
 
             FitOutcome outcome = Minimize();
-            if (HoldWidthsAtBound(tasks))
+            if (ChangeWidthsAtBound(tasks))
             {
                 continue;
             }
@@ -93,9 +124,8 @@ internal sealed partial class BlendFitter
                 return;
             }
 
-            if (outliers < MostOutliers && DropOutlier(outcome, first))
+            if (_outliers < MostOutliers && DropOutlier(outcome))
             {
-                outliers++;
                 Keep(tasks, origin);
                 continue;
             }

@@ -11,7 +11,7 @@ namespace StarLines.Lines;
 /// the global one as prior, b = 1 less the lines fitted elsewhere, and each line has depth A, centre λ₀ and widths w.
 /// Parameters in this order: c, then A, λ₀ and the widths of each line. Wavelengths count from a reference inside the window.
 /// </summary>
-internal sealed class BlendModel : INormalEquations
+internal sealed partial class BlendModel : INormalEquations
 {
     private readonly ILineProfile _profile;
     private readonly PixelSampling _sampling;
@@ -21,6 +21,8 @@ internal sealed class BlendModel : INormalEquations
     private int[] _starts = [];
     private int[] _counts = [];
     private int[] _offsets = [];
+    private double[] _priorWidths = [];
+    private double[] _priorWidthWeights = [];
     private int _lines;
     private double _priorWeight;
 
@@ -86,7 +88,20 @@ internal sealed class BlendModel : INormalEquations
             _starts = new int[lines];
             _counts = new int[lines];
             _offsets = new int[lines];
+            _priorWidths = new double[lines];
+            _answers = new double[1 + (lines * Stride)];
+            _priorWidthWeights = new double[lines];
         }
+    }
+
+    /// <summary>Makes the expected first width of a line a datum.</summary>
+    /// <param name="line">Index of the line.</param>
+    /// <param name="width">Expected width, Å.</param>
+    /// <param name="weight">Inverse of its standard deviation in ln of the width; 0 for none.</param>
+    internal void SetWidthPrior(int line, double width, double weight)
+    {
+        _priorWidths[line] = width;
+        _priorWidthWeights[line] = weight;
     }
 
     /// <inheritdoc/>
@@ -111,7 +126,7 @@ internal sealed class BlendModel : INormalEquations
             FillRows(line, matrix, gradient);
         }
 
-        return FixedLanes.Dot(residual, residual) + (pull * pull);
+        return FixedLanes.Dot(residual, residual) + (pull * pull) + AddWidthPriors(parameters, matrix, gradient);
     }
 
     /// <summary>Depth times profile of one line on the pixels of the window, in units of the local continuum.</summary>
@@ -215,6 +230,22 @@ internal sealed class BlendModel : INormalEquations
                 }
             }
         }
+    }
+
+    private double AddWidthPriors(ReadOnlySpan<double> parameters, Span<double> matrix, Span<double> gradient)
+    {
+        double sum = 0.0;
+        for (int line = 0; line < _lines; line++)
+        {
+            int index = 3 + (line * Stride);
+            double pull = Math.Log(_priorWidths[line] / parameters[index]) * _priorWidthWeights[line];
+            double slope = _priorWidthWeights[line] / parameters[index];
+            matrix[(index * ParameterCount) + index] += slope * slope;
+            gradient[index] += pull * slope;
+            sum += pull * pull;
+        }
+
+        return sum;
     }
 
     private void EnsureColumns(int length)

@@ -53,6 +53,10 @@ internal static class DirectSummation
         task.Warnings |= masked ? LineWarnings.MaskedPixels : LineWarnings.None;
         double posterior = double.IsNaN(task.ContinuumPosterior) ? task.ContinuumSigma : task.ContinuumPosterior;
         double placement = (length - sum) * posterior;
+
+        // What was taken out for the neighbours is as uncertain as the fit that parted them.
+        double parting = task.Blend > 0 ? task.NoiseSigma : 0.0;
+        variance += parting * parting;
         task.DirectNoise = Math.Sqrt(variance);
         task.Direct = new Measured(sum, Math.Sqrt(variance + (placement * placement)));
         NoteEdge(task, from, to, edges);

@@ -14,7 +14,13 @@ internal sealed class LineFinder
     private const double WidestKmPerS = 3000.0;
 
     /// <summary>Significance from which a line tells its own width.</summary>
-    private const double StrongSignificance = 8.0;
+    private const double StrongSignificance = 12.0;
+
+    /// <summary>Significance from which a line takes part in the median width of the spectrum.</summary>
+    private const double PlainWidthSignificance = 6.0;
+
+    /// <summary>Strong lines needed to scale the expected widths by what they show.</summary>
+    private const int LeastStrongLines = 5;
 
     /// <summary>Significance above which the start needs no search for the centre: the fit itself finds it.</summary>
     private const double PlainSignificance = 6.0;
@@ -87,12 +93,44 @@ internal sealed class LineFinder
     /// <summary>Looks once more for lines that were not found, now that the others are fitted and taken out.</summary>
     internal void LookAgain(LineTask[] tasks)
     {
+        ScaleExpectedWidths(tasks);
         foreach (LineTask task in tasks)
         {
             if (task.Status == LineStatus.Limit)
             {
                 task.Centre = task.Predicted;
                 FindCentre(task);
+            }
+        }
+    }
+
+    /// <summary>
+    /// Where the strong lines came out wider or narrower than expected (rotation, another instrument than that of the list), so
+    /// are the weak ones.
+    /// </summary>
+    private void ScaleExpectedWidths(LineTask[] tasks)
+    {
+        _relativeWidths.Clear();
+        foreach (LineTask task in tasks)
+        {
+            if (task.Status == LineStatus.Measured && !task.WidthHeld && Math.Abs(task.Significance) > StrongSignificance)
+            {
+                _relativeWidths.Add(task.Fwhm / task.ExpectedFwhm);
+            }
+        }
+
+        if (_relativeWidths.Count < LeastStrongLines)
+        {
+            return;
+        }
+
+        _relativeWidths.Sort();
+        double ratio = _relativeWidths[_relativeWidths.Count / 2];
+        foreach (LineTask task in tasks)
+        {
+            if (task.Usable && Math.Abs(task.Significance) <= StrongSignificance)
+            {
+                task.ExpectedFwhm = Math.Max(task.LeastFwhm, task.ExpectedFwhm * ratio);
             }
         }
     }
@@ -161,15 +199,15 @@ internal sealed class LineFinder
 
         double narrowest = Math.Max(knowsInstrument ? instrument : 0.0, (knowsInstrument ? 1.0 : NarrowestPixels) * task.PixelWidth);
         double width = Climb(task, narrowest, out double significance);
-        if (Math.Abs(significance) < StrongSignificance)
+        if (Math.Abs(significance) < PlainWidthSignificance || HasNeighbour(tasks, index, 1.5 * width))
         {
             return;
         }
 
-        if (!HasNeighbour(tasks, index, 1.5 * width))
+        _relativeWidths.Add(width / task.Predicted);
+        if (Math.Abs(significance) >= StrongSignificance)
         {
             task.ExpectedFwhm = width;
-            _relativeWidths.Add(width / task.Predicted);
         }
     }
 
@@ -203,7 +241,7 @@ internal sealed class LineFinder
         (index > 0 && tasks[index].Predicted - tasks[index - 1].Predicted < distance)
         || (index < tasks.Length - 1 && tasks[index + 1].Predicted - tasks[index].Predicted < distance);
 
-    /// <summary>Median width over wavelength of the strong lines; without them that of the instrument, or three pixels.</summary>
+    /// <summary>Median width over wavelength of the lines that show one; without them that of the instrument, or three pixels.</summary>
     private double CommonRelativeWidth()
     {
         if (_relativeWidths.Count > 0)

@@ -13,6 +13,9 @@ public static class LineMeasurer
     /// <summary>Passes over all lines: the second knows the widths, the neighbours and the lines hidden between them.</summary>
     private const int Passes = 2;
 
+    /// <summary>Passes at most, where widths still changed so much in the second that their windows were wrong.</summary>
+    private const int MostPasses = 4;
+
     /// <summary>
     /// Measures every line of a list. Lines that touch are fitted together by least squares with the local continuum, whose
     /// prior is the global one; each is also summed directly. What is not there becomes a limit of three standard deviations
@@ -40,11 +43,11 @@ public static class LineMeasurer
         var fitter = new BlendFitter(pixels, options, profile);
         var groups = new LineGroups(tasks.Length);
         finder.Start(tasks);
-        for (int pass = 0; pass < Passes; pass++)
+        for (int pass = 0; pass < Passes || (pass < MostPasses && !AreSettled(tasks)); pass++)
         {
             FitGroups(tasks, groups, pixels, fitter, options, pass);
             fitter.Rebuild(tasks);
-            if (pass < Passes - 1)
+            if (pass == 0)
             {
                 finder.LookAgain(tasks);
             }
@@ -135,7 +138,7 @@ public static class LineMeasurer
         {
             ReadOnlySpan<int> members = groups.Members(group);
             (int first, int last) = groups.Window(tasks, pixels, group, options.WindowHalfWidthFwhm);
-            if (pass == 0 || NeedsFit(tasks, pixels, members, first, last))
+            if (NeedsFit(tasks, pixels, members, first, last, pass))
             {
                 fitter.Fit(tasks, members, first, last);
             }
@@ -144,11 +147,38 @@ public static class LineMeasurer
         }
     }
 
-    /// <summary>A line alone in its window, which the first pass already had nearly right, is finished.</summary>
-    private static bool NeedsFit(LineTask[] tasks, NormalizedPixels pixels, ReadOnlySpan<int> members, int first, int last)
+    private static bool AreSettled(LineTask[] tasks)
+    {
+        foreach (LineTask task in tasks)
+        {
+            if (task.Status == LineStatus.Measured && !task.IsSettled)
+            {
+                return false;
+            }
+        }
+
+        return true;
+    }
+
+    /// <summary>A line alone in its window, which the first pass already had nearly right, is finished; after the second pass so is every settled line.</summary>
+    private static bool NeedsFit(
+        LineTask[] tasks, NormalizedPixels pixels, ReadOnlySpan<int> members, int first, int last, int pass)
     {
         LineTask task = tasks[members[0]];
-        if (members.Length > 1 || task.Status != LineStatus.Measured || task.Blend != 0)
+        bool measured = true;
+        bool settled = true;
+        foreach (int member in members)
+        {
+            measured &= tasks[member].Status == LineStatus.Measured;
+            settled &= tasks[member].IsSettled;
+        }
+
+        if (pass >= Passes)
+        {
+            return !settled;
+        }
+
+        if (pass == 0 || members.Length > 1 || !measured || task.Blend != 0)
         {
             return true;
         }

@@ -1,3 +1,4 @@
+using System;
 using StarLines.LineLists;
 
 namespace StarLines.Lines;
@@ -48,6 +49,9 @@ internal sealed class LineTask
     /// <summary>Whether the width is held at the expected one, because the data do not determine it.</summary>
     internal bool WidthHeld { get; set; }
 
+    /// <summary>How often it was allowed to be wider than expected.</summary>
+    internal int Widenings { get; set; }
+
     /// <summary>Centre.</summary>
     internal double Centre { get; set; }
 
@@ -62,6 +66,12 @@ internal sealed class LineTask
 
     /// <summary>Full width at half maximum.</summary>
     internal double Fwhm { get; set; }
+
+    /// <summary>The full width for which the window of the latest fit was made.</summary>
+    internal double WindowFwhm { get; set; }
+
+    /// <summary>Whether the latest fit had the window that its result asks for.</summary>
+    internal bool IsSettled => Math.Abs((Fwhm / WindowFwhm) - 1.0) < 0.25;
 
     /// <summary>Local continuum in units of the global one.</summary>
     internal double Continuum { get; set; } = 1.0;

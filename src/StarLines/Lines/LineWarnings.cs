@@ -18,7 +18,7 @@ public enum LineWarnings
     /// <summary><c>blended</c>: fitted together with neighbours.</summary>
     Blended = 4,
 
-    /// <summary><c>poor-fit</c>: the profile does not describe the data; see the reduced χ².</summary>
+    /// <summary><c>poor-fit</c>: the profile does not describe the data: the reduced χ² is too high, or the residuals ask for wings or shoulders.</summary>
     PoorFit = 8,
 
     /// <summary><c>continuum</c>: the continuum is not to be trusted here.</summary>
@@ -47,4 +47,10 @@ public enum LineWarnings
 
     /// <summary><c>no-convergence</c>: the fit stopped before it settled.</summary>
     NoConvergence = 4096,
+
+    /// <summary>
+    /// <c>unresolved</c>: a line fitted together with this one lies nearer than 0.85 full widths, where two equal Gaussians
+    /// no longer show two minima; only the sum of both is well determined.
+    /// </summary>
+    Unresolved = 8192,
 }

@@ -115,8 +115,17 @@ internal sealed class NormalizedPixels : IDisposable
     /// <summary>Whether no gap lies between two pixels.</summary>
     internal bool AreConnected(int pixel, int other)
     {
+        if (Spectrum.Scale.Sampling != WavelengthSampling.Tabulated)
+        {
+            return true;
+        }
+
+        // A little more than from centre to centre, so that rounding does not lose the last pixel.
         ReadOnlySpan<double> wavelengths = Spectrum.Scale.WavelengthsAngstrom;
-        (int first, int last) = Window(pixel, wavelengths[Math.Min(pixel, other)], wavelengths[Math.Max(pixel, other)]);
+        double margin = 0.25 * PixelWidth(other);
+        double from = wavelengths[Math.Min(pixel, other)] - margin;
+        double to = wavelengths[Math.Max(pixel, other)] + margin;
+        (int first, int last) = Window(pixel, from, to);
         return other >= first && other <= last;
     }
 
