@@ -27,6 +27,10 @@ public static class ContinuumFitter
     // Residual structure of a real spectrum is correlated over a resolution element of about this many pixels.
     private const double CorrelatedPixels = 4.0;
 
+    // Twice the log likelihood that a further free shape must gain: 2 is the criterion of Akaike (1974, IEEE Trans. Autom.
+    // Control 19, 716); somewhat more, since leaving a bend in costs less than following a broad line.
+    private const double FreedomCost = 3.0;
+
     // While the stiffness is chosen this many pixels are enough.
     private const int SearchPixels = 2500;
     private const int FirstSteps = 10;
@@ -79,10 +83,7 @@ public static class ContinuumFitter
         ContinuumNoise noise = Start(thin, ContinuumNoise.BlocksFor(data.Count), shortest);
         double stiffness = options.StiffnessAngstrom ?? ChooseStiffness(thin, noise, shortest, longest);
         ContinuumIteration rough = Iterate(thin, noise, stiffness, StepsPerCandidate, learn: true);
-        for (int i = 0; i < data.Count; i++)
-        {
-            data.Level[i] = rough.Spline.Evaluate(data.X[i]);
-        }
+        rough.Spline.Evaluate(data.X, rough.Spline.IntervalEnds(data.X), data.Level);
 
         ContinuumNoise fullNoise = noise.ForPixels(data.Count);
         ContinuumIteration final = Finish(data, fullNoise, stiffness);
@@ -146,16 +147,14 @@ public static class ContinuumFitter
 
     private static int Best(ContinuumData data, ContinuumIteration[] iterations, double[][] levels)
     {
-        // Schwarz (1978), Annals of Statistics 6, 461.
         int best = 0;
         double least = double.PositiveInfinity;
         double independent = data.Stride / CorrelatedPixels;
         for (int k = 0; k < iterations.Length; k++)
         {
             levels[k].CopyTo(data.Level.AsSpan());
-            iterations[k].Judge();
-            double criterion = (-2.0 * independent * iterations[k].LogLikelihood)
-                + (iterations[k].Freedom * 3.0);
+            double criterion = (-2.0 * independent * iterations[k].LogLikelihood())
+                + (iterations[k].Freedom * FreedomCost);
             if (criterion < least)
             {
                 least = criterion;

@@ -12,10 +12,14 @@ internal sealed class ContinuumIteration
     private const double LeastNoiseScale = 0.25;
     private const double LargestNoiseScale = 1e6;
 
+    // What a pixel that is no continuum has for density, in units of the typical level.
+    private const double Background = 0.1;
+
     private readonly ContinuumData _data;
     private readonly ContinuumNoise _noise;
     private readonly double _stiffness;
     private readonly PenalizedSpline _spline;
+    private readonly int[] _ends;
 
     internal ContinuumIteration(ContinuumData data, ContinuumNoise noise, double stiffness)
     {
@@ -26,13 +30,11 @@ internal sealed class ContinuumIteration
         double range = Math.Max(data.X[^1] - first, first * 1e-9);
         int intervals = Math.Clamp((int)Math.Ceiling(range * KnotsPerStiffness / stiffness), 1, MostIntervals);
         _spline = new PenalizedSpline(first, first + range, intervals);
+        _ends = _spline.IntervalEnds(data.X);
     }
 
     /// <summary>The fitted spline.</summary>
     internal PenalizedSpline Spline => _spline;
-
-    /// <summary>Sum of ln p over the pixels: how well level and noise explain the data.</summary>
-    internal double LogLikelihood { get; private set; }
 
     /// <summary>Number of free shapes of the continuum that the stiffness leaves.</summary>
     internal double Freedom => 3.0 + (2.0 * _spline.KnotStep * _spline.Intervals / _stiffness);
@@ -44,11 +46,24 @@ internal sealed class ContinuumIteration
         _spline.Clear();
         _noise.BeginStep();
         double total = 0.0;
-        double scale = _noise.Scale;
-        double inverseScale = 1.0 / scale;
-        for (int block = 0; block < _noise.Blocks; block++)
+        int start = 0;
+        int block = 0;
+        int blockEnd = _noise.PixelsOf(0).End;
+        for (int interval = 0; interval < _ends.Length; interval++)
         {
-            total += AddBlock(block, scale, inverseScale);
+            int end = _ends[interval];
+            while (start < end)
+            {
+                while (start >= blockEnd)
+                {
+                    block++;
+                    blockEnd = _noise.PixelsOf(block).End;
+                }
+
+                int stop = Math.Min(end, blockEnd);
+                total += AddPixels(start, stop, interval, block);
+                start = stop;
+            }
         }
 
         Solve(total);
@@ -58,8 +73,8 @@ internal sealed class ContinuumIteration
         }
     }
 
-    /// <summary>Evaluates ln p of the present level with the noise model as it stands.</summary>
-    internal void Judge()
+    /// <summary>The sum of ln p of the present level, by the noise model as it stands.</summary>
+    internal double LogLikelihood()
     {
         double inverseScale = 1.0 / _noise.Scale;
         double sum = 0.0;
@@ -77,7 +92,7 @@ internal sealed class ContinuumIteration
             }
         }
 
-        LogLikelihood = sum;
+        return sum;
     }
 
     /// <summary>
@@ -95,44 +110,45 @@ internal sealed class ContinuumIteration
             {
                 double w = _data.InverseSigma[i] / _noise.Scale;
                 double r = (_data.Flux[i] - _data.Level[i]) * w;
-                sum += w > 0.0 ? Math.Log((core * w * Math.Exp(-0.5 * r * r)) + (1.0 - core) + 0.1) : 0.0;
+                sum += w > 0.0 ? Math.Log((core * w * Math.Exp(-0.5 * r * r)) + (1.0 - core) + Background) : 0.0;
             }
         }
 
         return sum;
     }
 
-    private double AddBlock(int block, double scale, double inverseScale)
+    private double AddPixels(int start, int stop, int interval, int block)
     {
         ContinuumMixture mixture = _noise.Mixture(block);
+        double inverseScale = 1.0 / _noise.Scale;
         double shift = mixture.Shift;
-        double raise = shift * scale;
-        (int start, int end) = _noise.PixelsOf(block);
-        double total = 0.0;
-        double[] x = _data.X;
-        double[] flux = _data.Flux;
-        double[] inverseSigma = _data.InverseSigma;
-        double[] level = _data.Level;
-        for (int i = start; i < end; i++)
+        double raise = shift * _noise.Scale;
+        double left = _spline.First + (interval * _spline.KnotStep);
+        double perStep = 1.0 / _spline.KnotStep;
+        var moments = default(SplineMoments);
+        var counts = default(MixtureCounts);
+        ReadOnlySpan<double> x = _data.X.AsSpan(start, stop - start);
+        ReadOnlySpan<double> flux = _data.Flux.AsSpan(start, stop - start);
+        ReadOnlySpan<double> inverseSigma = _data.InverseSigma.AsSpan(start, stop - start);
+        ReadOnlySpan<double> level = _data.Level.AsSpan(start, stop - start);
+        for (int i = 0; i < x.Length; i++)
         {
             double w = inverseSigma[i];
             double r = (flux[i] - level[i]) * w * inverseScale;
-            if (w <= 0.0 || Math.Abs(r) > ContinuumMixture.Reach)
+            if (!(w > 0.0) || !(Math.Abs(r) < ContinuumMixture.Reach))
             {
                 continue;
             }
 
             double p = mixture.Probability(r, out double absorbed);
-            _noise.Count(block, shift, r, p, absorbed);
+            counts.Add(r, shift, p, absorbed);
             double ws = w * inverseScale;
-            double weight = p * ws * ws;
-            total += weight;
-            int j = _spline.Locate(x[i], out double t);
-            PenalizedSpline.Basis(t, out double b0, out double b1, out double b2, out double b3);
-            _spline.Add(j, b0, b1, b2, b3, weight, flux[i] + (raise / w));
+            moments.Add((x[i] - left) * perStep, p * ws * ws, flux[i] + (raise / w));
         }
 
-        return total;
+        _noise.Count(block, counts);
+        _spline.Add(interval, moments);
+        return moments.W0;
     }
 
     private void Solve(double total)
@@ -141,9 +157,6 @@ internal sealed class ContinuumIteration
         double perAngstrom = total / range;
         double penalty = perAngstrom * Math.Pow(_stiffness / (2.0 * Math.PI), 6.0) / Math.Pow(_spline.KnotStep, 5.0);
         _spline.Solve(penalty);
-        for (int i = 0; i < _data.Count; i++)
-        {
-            _data.Level[i] = _spline.Evaluate(_data.X[i]);
-        }
+        _spline.Evaluate(_data.X, _ends, _data.Level);
     }
 }

@@ -26,6 +26,9 @@ internal sealed class ContinuumMixture
     private const double LargestShift = 0.6;
     private const double LeastDensity = 1e-5;
 
+    // A block is told what the whole spectrum is like with the weight of this many pixels.
+    private const double PriorPixels = 60.0;
+
     private static readonly double[] s_phi = MakePhi();
     private static readonly double[] s_upper = MakeUpper();
 
@@ -74,20 +77,14 @@ internal sealed class ContinuumMixture
     }
 
     /// <summary>Learns the three numbers from the sums of an expectation step.</summary>
-    /// <param name="pixels">Pixels within <see cref="Reach"/>.</param>
-    /// <param name="core">Sum of their probabilities of being continuum.</param>
-    /// <param name="below">Sum of their probabilities of being absorbed.</param>
+    /// <param name="counts">The sums.</param>
     /// <param name="prior">The mixture of a wider region, counted as some pixels; null for none.</param>
-    internal void Learn(double pixels, double core, double below, ContinuumMixture? prior)
+    internal void Learn(in MixtureCounts counts, ContinuumMixture? prior)
     {
-        if (prior is not null)
-        {
-            const double PriorPixels = 60.0;
-            pixels += PriorPixels;
-            core += PriorPixels * prior.Core;
-            below += PriorPixels * prior.Below * Reach;
-        }
-
+        double extra = prior is null ? 0.0 : PriorPixels;
+        double pixels = counts.Pixels + extra;
+        double core = counts.Core + (extra * (prior?.Core ?? 0.0));
+        double below = counts.Below + (extra * (prior?.Below ?? 0.0) * Reach);
         if (pixels < 1.0)
         {
             return;

@@ -9,16 +9,13 @@ internal sealed class ContinuumNoise
     private const int BlockPixels = 2000;
     private const int MostBlocks = 16;
 
+    // Fewer pixels than this above the level say nothing of the noise.
+    private const double LeastWeight = 10.0;
+
     private readonly int _pixels;
     private readonly ContinuumMixture[] _mixtures;
     private readonly ContinuumMixture _whole = new();
-    private readonly double[] _counted;
-    private readonly double[] _core;
-    private readonly double[] _below;
-    private double _scaleSum;
-    private double _scaleWeight;
-
-    private double _lost;
+    private readonly MixtureCounts[] _counts;
 
     internal ContinuumNoise(int pixels, int blocks, double scale)
     {
@@ -31,13 +28,17 @@ internal sealed class ContinuumNoise
             _mixtures[b] = new ContinuumMixture();
         }
 
-        _counted = new double[Blocks];
-        _core = new double[Blocks];
-        _below = new double[Blocks];
+        _counts = new MixtureCounts[Blocks];
     }
 
     /// <summary>Number of blocks.</summary>
     internal int Blocks { get; }
+
+    /// <summary>Scatter of the continuum pixels in units of the quoted noise.</summary>
+    internal double Scale { get; private set; }
+
+    /// <summary>Information a pixel of the core carries against one that is surely continuum, 0.1 to 1 (Louis 1982).</summary>
+    internal double Information { get; private set; } = 1.0;
 
     /// <summary>The number of blocks that so many pixels can feed.</summary>
     internal static int BlocksFor(int pixels) => Math.Clamp(pixels / BlockPixels, 1, MostBlocks);
@@ -51,12 +52,6 @@ internal sealed class ContinuumNoise
         return other;
     }
 
-    /// <summary>Scatter of the continuum pixels in units of the quoted noise.</summary>
-    internal double Scale { get; set; }
-
-    /// <summary>Information a pixel of the core carries against one that is surely continuum, 0 to 1 (Louis 1982).</summary>
-    internal double Information { get; private set; } = 1.0;
-
     /// <summary>The mixture of a block.</summary>
     internal ContinuumMixture Mixture(int block) => _mixtures[block];
 
@@ -64,55 +59,41 @@ internal sealed class ContinuumNoise
     internal (int Start, int End) PixelsOf(int block) =>
         ((int)((long)_pixels * block / Blocks), (int)((long)_pixels * (block + 1) / Blocks));
 
-    internal void BeginStep()
-    {
-        Array.Clear(_counted);
-        Array.Clear(_core);
-        Array.Clear(_below);
-        _scaleSum = 0.0;
-        _scaleWeight = 0.0;
-        _lost = 0.0;
-    }
+    /// <summary>Forgets the counts of the last step.</summary>
+    internal void BeginStep() => Array.Clear(_counts);
 
-    /// <summary>Counts one pixel within the reach of the mixture.</summary>
-    internal void Count(int block, double shift, double r, double p, double absorbed)
-    {
-        _counted[block] += 1.0;
-        _core[block] += p;
-        _below[block] += absorbed;
-        double shifted = r + shift;
-        _lost += p * (1.0 - p) * shifted * shifted;
-        if (r > 0.0)
-        {
-            // Absorption leaves this side alone.
-            _scaleSum += p * r * r;
-            _scaleWeight += p;
-        }
-    }
+    /// <summary>Adds the counts of some pixels of a block.</summary>
+    internal void Count(int block, in MixtureCounts counts) => Add(ref _counts[block], counts);
 
     /// <summary>Learns from what was counted.</summary>
     internal void EndStep(double leastScale, double largestScale)
     {
-        double counted = 0.0;
-        double core = 0.0;
-        double below = 0.0;
-        for (int b = 0; b < Blocks; b++)
+        var whole = default(MixtureCounts);
+        foreach (MixtureCounts counts in _counts)
         {
-            counted += _counted[b];
-            core += _core[b];
-            below += _below[b];
+            Add(ref whole, counts);
         }
 
-        _whole.Learn(counted, core, below, null);
+        _whole.Learn(whole, null);
         for (int b = 0; b < Blocks; b++)
         {
-            _mixtures[b].Learn(_counted[b], _core[b], _below[b], _whole);
+            _mixtures[b].Learn(_counts[b], _whole);
         }
 
-        Information = core > 0.0 ? Math.Clamp(1.0 - (_lost / core), 0.1, 1.0) : 1.0;
-        if (_scaleWeight > 10.0)
+        Information = whole.Core > 0.0 ? Math.Clamp(1.0 - (whole.Lost / whole.Core), 0.1, 1.0) : 1.0;
+        if (whole.Weight > LeastWeight)
         {
-            Scale = Math.Clamp(Scale * Math.Sqrt(_scaleSum / _scaleWeight), leastScale, largestScale);
+            Scale = Math.Clamp(Scale * Math.Sqrt(whole.Squares / whole.Weight), leastScale, largestScale);
         }
+    }
+
+    private static void Add(ref MixtureCounts sum, in MixtureCounts counts)
+    {
+        sum.Pixels += counts.Pixels;
+        sum.Core += counts.Core;
+        sum.Below += counts.Below;
+        sum.Lost += counts.Lost;
+        sum.Squares += counts.Squares;
+        sum.Weight += counts.Weight;
     }
 }

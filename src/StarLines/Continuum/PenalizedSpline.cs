@@ -14,6 +14,15 @@ internal sealed class PenalizedSpline
     // Keeps the factor positive where no pixel has weight; 10⁻⁹ of the largest diagonal moves nothing else.
     private const double Ridge = 1e-9;
 
+    // The four basis functions as polynomials of t: row k holds the coefficients of 1, t, t², t³.
+    private static readonly double[] s_powers =
+    [
+        1.0 / 6.0, -0.5, 0.5, -1.0 / 6.0,
+        4.0 / 6.0, 0.0, -1.0, 0.5,
+        1.0 / 6.0, 0.5, 0.5, -0.5,
+        0.0, 0.0, 0.0, 1.0 / 6.0,
+    ];
+
     private readonly double[] _matrix;
     private readonly double[] _right;
     private readonly double[] _factor;
@@ -81,29 +90,77 @@ internal sealed class PenalizedSpline
         Array.Clear(_right);
     }
 
-    /// <summary>Adds one datum to the normal equations.</summary>
-    internal void Add(int interval, double b0, double b1, double b2, double b3, double weight, double value)
+    /// <summary>For each interval the index after its last abscissa.</summary>
+    /// <param name="x">Abscissae in rising order, within the range.</param>
+    internal int[] IntervalEnds(ReadOnlySpan<double> x)
     {
-        Span<double> m = _matrix.AsSpan(interval * Order, Order * Order);
-        Span<double> r = _right.AsSpan(interval, Order);
-        double w0 = weight * b0;
-        double w1 = weight * b1;
-        double w2 = weight * b2;
-        double w3 = weight * b3;
-        m[0] += w0 * b0;
-        m[1] += w0 * b1;
-        m[2] += w0 * b2;
-        m[3] += w0 * b3;
-        m[4] += w1 * b1;
-        m[5] += w1 * b2;
-        m[6] += w1 * b3;
-        m[8] += w2 * b2;
-        m[9] += w2 * b3;
-        m[12] += w3 * b3;
-        r[0] += w0 * value;
-        r[1] += w1 * value;
-        r[2] += w2 * value;
-        r[3] += w3 * value;
+        var ends = new int[Intervals];
+        int i = 0;
+        for (int interval = 0; interval < Intervals - 1; interval++)
+        {
+            double right = First + ((interval + 1) * KnotStep);
+            while (i < x.Length && x[i] < right)
+            {
+                i++;
+            }
+
+            ends[interval] = i;
+        }
+
+        ends[Intervals - 1] = x.Length;
+        return ends;
+    }
+
+    /// <summary>The spline at many abscissae.</summary>
+    /// <param name="x">Abscissae in rising order.</param>
+    /// <param name="ends">Their <see cref="IntervalEnds"/>.</param>
+    /// <param name="destination">As many values.</param>
+    internal void Evaluate(ReadOnlySpan<double> x, ReadOnlySpan<int> ends, Span<double> destination)
+    {
+        int i = 0;
+        double perStep = 1.0 / KnotStep;
+        for (int interval = 0; interval < ends.Length; interval++)
+        {
+            ReadOnlySpan<double> c = Coefficients.AsSpan(interval, Order);
+            double p0 = (c[0] + (4.0 * c[1]) + c[2]) / 6.0;
+            double p1 = (c[2] - c[0]) / 2.0;
+            double p2 = (c[0] - (2.0 * c[1]) + c[2]) / 2.0;
+            double p3 = (c[3] - c[0] + (3.0 * (c[1] - c[2]))) / 6.0;
+            double left = First + (interval * KnotStep);
+            for (; i < ends[interval]; i++)
+            {
+                double t = (x[i] - left) * perStep;
+                destination[i] = p0 + (t * (p1 + (t * (p2 + (t * p3)))));
+            }
+        }
+    }
+
+    /// <summary>Adds the data of one interval to the normal equations.</summary>
+    internal void Add(int interval, in SplineMoments moments)
+    {
+        for (int k = 0; k < Order; k++)
+        {
+            double right = 0.0;
+            for (int i = 0; i < Order; i++)
+            {
+                right += s_powers[(k * Order) + i] * moments.Y(i);
+            }
+
+            _right[interval + k] += right;
+            for (int l = k; l < Order; l++)
+            {
+                double sum = 0.0;
+                for (int i = 0; i < Order; i++)
+                {
+                    for (int j = 0; j < Order; j++)
+                    {
+                        sum += s_powers[(k * Order) + i] * s_powers[(l * Order) + j] * moments.W(i + j);
+                    }
+                }
+
+                _matrix[((interval + k) * Order) + l - k] += sum;
+            }
+        }
     }
 
     /// <summary>Solves for the coefficients.</summary>
