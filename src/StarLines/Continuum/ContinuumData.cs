@@ -87,6 +87,24 @@ internal sealed class ContinuumData
         return new ContinuumData(x, y, w, unit);
     }
 
+    /// <summary>Takes the level over from a continuum of all pixels.</summary>
+    /// <param name="continuum">The continuum.</param>
+    /// <param name="scale">Its wavelengths.</param>
+    internal void SetLevel(ContinuumFit continuum, WavelengthScale scale)
+    {
+        ReadOnlySpan<double> wavelengths = scale.WavelengthsAngstrom;
+        int pixel = 0;
+        for (int i = 0; i < Count; i++)
+        {
+            while (wavelengths[pixel] < X[i])
+            {
+                pixel++;
+            }
+
+            Level[i] = continuum.Level[pixel] / Unit;
+        }
+    }
+
     /// <summary>Every so-manieth pixel, in arrays of its own.</summary>
     /// <param name="stride">At least 1.</param>
     internal ContinuumData Thinned(int stride)
@@ -98,6 +116,7 @@ internal sealed class ContinuumData
             thin.X[i] = X[i * stride];
             thin.Flux[i] = Flux[i * stride];
             thin.InverseSigma[i] = InverseSigma[i * stride];
+            thin.Level[i] = Level[i * stride];
         }
 
         return thin;

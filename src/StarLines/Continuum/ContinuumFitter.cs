@@ -64,9 +64,42 @@ public static class ContinuumFitter
             Guard.SameLength(lineModel.Length, spectrum.Count, nameof(lineModel));
         }
 
+        ContinuumData? data = Data(spectrum, lineModel);
+        return data is null ? Nothing(spectrum.Count) : FitData(spectrum, data, options);
+    }
+
+    /// <summary>Fits the continuum again, once lines have been fitted, beginning from what was found before.</summary>
+    /// <param name="spectrum">The spectrum; N pixels.</param>
+    /// <param name="previous">The continuum on which the lines were fitted.</param>
+    /// <param name="lineModel">N values of the fitted lines in units of that continuum, divided out first.</param>
+    /// <returns>A continuum of the same stiffness.</returns>
+    /// <exception cref="ArgumentException">The lengths differ.</exception>
+    public static ContinuumFit Refine(Spectrum spectrum, ContinuumFit previous, ReadOnlySpan<double> lineModel)
+    {
+        ArgumentNullException.ThrowIfNull(spectrum);
+        ArgumentNullException.ThrowIfNull(previous);
+        Guard.SameLength(previous.Count, spectrum.Count, nameof(previous));
+        Guard.SameLength(lineModel.Length, spectrum.Count, nameof(lineModel));
+        ContinuumData? data = Data(spectrum, lineModel);
+        if (data is null || !(previous.StiffnessAngstrom > 0.0))
+        {
+            return previous;
+        }
+
+        data.SetLevel(previous, spectrum.Scale);
+        ContinuumData thin = data.Thinned(Math.Max(1, data.Count / SearchPixels));
+        var noise = new ContinuumNoise(thin.Count, ContinuumNoise.BlocksFor(data.Count), 1.0);
+        Iterate(thin, noise, previous.StiffnessAngstrom, FirstSteps, learn: true);
+        ContinuumNoise fullNoise = noise.ForPixels(data.Count);
+        ContinuumIteration final = Finish(data, fullNoise, previous.StiffnessAngstrom);
+        return ContinuumResult.Make(spectrum, data, fullNoise, final.Spline, previous.StiffnessAngstrom);
+    }
+
+    private static ContinuumData? Data(Spectrum spectrum, ReadOnlySpan<double> lineModel)
+    {
         ReadOnlySpan<double> sigma = spectrum.HasSigma ? spectrum.Sigma : NoiseEstimator.EstimatePerPixel(spectrum);
         ContinuumData? data = ContinuumData.From(spectrum, sigma, lineModel);
-        return data is null || data.Count < 2 ? Nothing(spectrum.Count) : FitData(spectrum, data, options);
+        return data is { Count: > 1 } ? data : null;
     }
 
     private static ContinuumFit FitData(Spectrum spectrum, ContinuumData data, ContinuumOptions options)

@@ -73,8 +73,9 @@ public sealed class ContinuumFitterTests
         WavelengthScale scale = WavelengthScale.Linear(4600, 0.25, Pixels, Medium.Air);
         double[] flux = [.. Enumerable.Range(0, Pixels).Select(i =>
         {
-            double x = (scale.WavelengthAngstrom(i) - 4861.3) / 15.0;
-            return 1000.0 * (1.0 - (0.7 / (1.0 + (x * x)))) * (1.0 + (0.01 * Gaussian.Next(random)));
+            // Wings of the exponent 5/2 of linear Stark broadening.
+            double x = Math.Abs(scale.WavelengthAngstrom(i) - 4861.3) / 12.0;
+            return 1000.0 * (1.0 - (0.7 / (1.0 + Math.Pow(x, 2.5)))) * (1.0 + (0.01 * Gaussian.Next(random)));
         })];
         ContinuumFit fit = ContinuumFitter.Fit(new Spectrum(scale, flux));
         Assert.InRange(fit.Level[(int)scale.IndexOf(4861.3)] / 1000.0, 0.97, 1.03);
