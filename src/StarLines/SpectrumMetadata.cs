@@ -26,6 +26,9 @@ public sealed record SpectrumMetadata
     /// <summary>The middle of the exposure, UTC.</summary>
     public JulianDate? MidExposureUtc { get; init; }
 
+    /// <summary>What <see cref="MidExposureUtc"/> was taken from, such as <c>DATE-OBS + half the exposure</c>; empty where it is unknown.</summary>
+    public string MidExposureFrom { get; init; } = "";
+
     /// <summary>Exposure time, seconds.</summary>
     public double? ExposureSeconds { get; init; }
 
