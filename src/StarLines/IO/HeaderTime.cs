@@ -50,7 +50,7 @@ internal static class HeaderTime
     {
         from = "";
         JulianDate? mid = StatedMiddle(header, ref from) ?? Middle(header, exposureSeconds, ref from, context);
-        return mid is JulianDate date ? ToUtc(date, header, context) : null;
+        return mid;
     }
 
     private static JulianDate? StatedMiddle(HeaderKeywords header, ref string from)
