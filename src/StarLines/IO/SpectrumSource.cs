@@ -72,7 +72,7 @@ internal sealed class SpectrumSource : IDisposable
         try
         {
             using var memory = new MemoryStream(TextPreamble.Comment(bytes), writable: false);
-            throw new SpectrumFormatException($"{name}: Only FITS files can be read.");
+            return new SpectrumSource(name, null, TableReader.Read(memory, TableFormat.Auto, name), "table");
         }
         catch (TableFormatException cause)
         {
