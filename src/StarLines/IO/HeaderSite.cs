@@ -1,5 +1,6 @@
 using System;
 using System.Globalization;
+using StarLines.Velocities.Barycentre;
 
 namespace StarLines.IO;
 
@@ -72,7 +73,13 @@ internal static class HeaderSite
 
         double radius = Math.Sqrt((x * x) + (y * y) + (z * z));
         // A place within 100 km of the surface; anything else is a spacecraft or a mistake.
-        return radius is > 6.3e6 and < 6.48e6 ? FromGeocentric(name, x, y, z) : null;
+        if (radius is not (> 6.3e6 and < 6.48e6))
+        {
+            return null;
+        }
+
+        (double latitude, double longitude, double height) = Geodesy.ToGeodetic(new Vector3(x, y, z));
+        return new ObservingSite(name, latitude, longitude, height);
     }
 
     private static ObservingSite? FromCoordinates(HeaderKeywords header, string name, ObservingSite? listed, ReadContext context)
@@ -135,8 +142,6 @@ internal static class HeaderSite
     private static double Apart(double a, double b) => Math.Abs(Math.IEEERemainder(a - b, 360.0));
 
     private static ObservingSite? Lookup(string name) => null;
-
-    private static ObservingSite? FromGeocentric(string name, double x, double y, double z) => null;
 
     private static bool SaysWest(string comment) =>
         comment.Contains("west", StringComparison.OrdinalIgnoreCase)

@@ -1,5 +1,6 @@
 using System;
 using System.Globalization;
+using StarLines.Velocities;
 
 namespace StarLines.IO;
 
@@ -50,7 +51,7 @@ internal static class HeaderTime
     {
         from = "";
         JulianDate? mid = StatedMiddle(header, ref from) ?? Middle(header, exposureSeconds, ref from, context);
-        return mid;
+        return mid is JulianDate date ? ToUtc(date, header, context) : null;
     }
 
     private static JulianDate? StatedMiddle(HeaderKeywords header, ref string from)
@@ -81,7 +82,7 @@ internal static class HeaderTime
 
         string timeKey = "";
         return DateOnly(header) is double midnight && TimeOfDay(header, MidTimes, ref timeKey) is double seconds && seconds != 0.0
-            ? Named(ref from, "DATE-OBS + " + timeKey, new JulianDate(midnight, seconds / SecondsADay))
+            ? Named(ref from, "DATE-OBS + " + timeKey, UtcTime.FromSecondsOfDay(midnight, seconds))
             : null;
     }
 
@@ -101,14 +102,14 @@ internal static class HeaderTime
             if (elapsed > 0.0 && elapsed > 0.9 * exposure && elapsed < exposure + LongestOverheadSeconds)
             {
                 from += " and " + endKey;
-                return begin.AddDays(0.5 * elapsed / SecondsADay);
+                return UtcTime.AddSeconds(begin, 0.5 * elapsed);
             }
         }
 
         if (exposureSeconds is double seconds)
         {
             from += " + half the exposure";
-            return begin.AddDays(0.5 * seconds / SecondsADay);
+            return UtcTime.AddSeconds(begin, 0.5 * seconds);
         }
 
         context.Note("time-is-start", $"No exposure time is given; the time of {from} is used as it is. Give the middle of the exposure by --time.");
@@ -134,12 +135,33 @@ internal static class HeaderTime
             return number;
         }
 
+        start ??= AtomicSeconds(header, ref from, context);
+
         if (start is null && DateOnly(header) is not null)
         {
             context.Note("time-of-day-missing", "The header gives the date of the observation but not the time of day; give the middle of the exposure by --time.");
         }
 
         return start;
+    }
+
+    /// <summary>Seconds since MJD 0 in atomic time, as one survey writes it; of use where all exposures are of one night.</summary>
+    private static JulianDate? AtomicSeconds(HeaderKeywords header, ref string from, ReadContext context)
+    {
+        if (!header.TryNumber("TAI", out double seconds) || seconds is < 4.0e9 or > 6.5e9)
+        {
+            return null;
+        }
+
+        if (header.Text("MJDLIST").Contains(' ', StringComparison.Ordinal))
+        {
+            context.Note("time-of-many-nights", "The spectrum was added up from exposures of several nights; give the mean time by --time.");
+            return null;
+        }
+
+        from = "TAI";
+        double day = Math.Floor(seconds / SecondsADay);
+        return new JulianDate(day + CalendarDate.MjdZero, (seconds / SecondsADay) - day);
     }
 
     private static JulianDate? StartOfDates(HeaderKeywords header, double? exposureSeconds, ref string from)
@@ -161,7 +183,7 @@ internal static class HeaderTime
             if (!placeholder || seconds != 0.0)
             {
                 from = "DATE-OBS + " + timeKey;
-                return new JulianDate(midnight, seconds / SecondsADay);
+                return UtcTime.FromSecondsOfDay(midnight, seconds);
             }
         }
 
@@ -187,7 +209,7 @@ internal static class HeaderTime
         if (TimeOfDay(header, EndTimes, ref from) is double seconds)
         {
             double day = Math.Floor(start.Value - 0.5) + 0.5;
-            var end = new JulianDate(day, seconds / SecondsADay);
+            var end = UtcTime.FromSecondsOfDay(day, seconds);
             return SecondsBetween(start, end) < 0.0 ? end.AddDays(1.0) : end;
         }
 
@@ -198,7 +220,7 @@ internal static class HeaderTime
         header.TryGet(key, out string? text, out string comment)
         && !comment.Contains("local", StringComparison.OrdinalIgnoreCase)
         && CalendarDate.TryParse(text, out double midnight, out double seconds) && !double.IsNaN(seconds)
-            ? new JulianDate(midnight, seconds / SecondsADay)
+            ? UtcTime.FromSecondsOfDay(midnight, seconds)
             : null;
 
     private static double? DateOnly(HeaderKeywords header)
@@ -258,6 +280,26 @@ internal static class HeaderTime
         }
 
         return null;
+    }
+
+    /// <summary>Brings a time of another scale (TIMESYS) to UTC; what is not a scale of atomic clocks is taken for UTC.</summary>
+    private static JulianDate ToUtc(JulianDate date, HeaderKeywords header, ReadContext context)
+    {
+        string scale = header.Text("TIMESYS").ToUpperInvariant();
+        double? minusTaiSeconds = scale switch
+        {
+            "TAI" or "IAT" => 0.0,
+            "TT" or "TDT" or "ET" or "TDB" => TimeScales.TtMinusTaiSeconds,
+            "GPS" => -19.0,
+            _ => null,
+        };
+        if (minusTaiSeconds is not double offset)
+        {
+            return date;
+        }
+
+        context.Note("time-scale", $"TIMESYS = {scale}; the time was brought to UTC.");
+        return TimeScales.UtcFromTai(date.AddDays(-offset / SecondsADay));
     }
 
     private static bool IsMiddle(string comment) =>
