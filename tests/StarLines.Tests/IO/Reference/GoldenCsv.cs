@@ -38,7 +38,7 @@ internal static class GoldenCsv
         _ => double.Parse(cell, CultureInfo.InvariantCulture),
     };
 
-    private static string[] Split(string line)
+    public static string[] Split(string line)
     {
         var cells = new List<string>();
         bool quoted = false;
