@@ -43,6 +43,11 @@ internal static class FitsImageSpectra
         bool rowsAreParts = labels is not null && shape.Planes == 1;
         int orders = rowsAreParts ? 1 : shape.Rows;
         bool named = row > 0;
+        if (orders > 1 && !named && labels is null && !SaysSpectrum(header, shape))
+        {
+            throw context.Error($"The image ({Size(image)}) has several rows and an axis that does not say it is spectral (CTYPE{shape.Axis}); name the row that is a spectrum as FILE#HDU:ROW.");
+        }
+
         if (row > orders)
         {
             throw context.Error(string.Create(CultureInfo.InvariantCulture, $"There is no row {row}; the image holds {orders}."));
@@ -140,6 +145,12 @@ internal static class FitsImageSpectra
     /// <summary>Whether the header describes its rows as the orders or apertures of one exposure.</summary>
     private static bool HasOrders(HeaderKeywords header) =>
         header.Has("APNUM2") || header.Text("CTYPE1").StartsWith("MULTI", StringComparison.OrdinalIgnoreCase);
+
+    /// <summary>Whether the axis has a type or a unit; a picture without either has numbers that mean nothing here.</summary>
+    private static bool SaysSpectrum(HeaderKeywords header, ImageShape shape) =>
+        header.Has(string.Create(CultureInfo.InvariantCulture, $"CTYPE{shape.Axis}"))
+        || header.Has(string.Create(CultureInfo.InvariantCulture, $"CUNIT{shape.Axis}"))
+        || header.Has("COEFF0");
 
     private static string AxisWords(HeaderKeywords header) =>
         $"{header.Text("CTYPE1")} {header.Comment("CTYPE1")} {header.Comment("CRVAL1")} {header.Comment("CUNIT1")} {header.Text("WAT1_001")}";

@@ -73,9 +73,10 @@ internal static partial class HeaderMedium
         return saysVacuum == saysAir ? Documented(header) : saysVacuum ? Medium.Vacuum : Medium.Air;
     }
 
-    /// <summary>Collections whose descriptions say vacuum and whose files do not.</summary>
+    /// <summary>Collections whose descriptions say vacuum and whose files do not: HST flux standards, an integral-field survey, an infrared survey.</summary>
     private static Medium Documented(HeaderKeywords header) =>
-        header.Text("MAPKEY").Equals("calspec", StringComparison.OrdinalIgnoreCase)
+        header.Text("DBTABLE").Equals("CRSPECTRUM", StringComparison.OrdinalIgnoreCase)
+        || header.Has("IFUDESIGN")
         || header.Text("SURVEY").Contains("apogee", StringComparison.OrdinalIgnoreCase)
             ? Medium.Vacuum
             : Medium.Unknown;

@@ -1,6 +1,6 @@
 using System;
 using System.Globalization;
-using StarLines.Velocities;
+using StarLines.Velocities.Time;
 
 namespace StarLines.IO;
 
