@@ -18,6 +18,9 @@ internal sealed class ResidualSpectrum
     /// <summary>This part of the pixels at each end fades to nothing in the correlation.</summary>
     private const double Taper = 0.02;
 
+    /// <summary>Weights in the correlation are even over so many pixels.</summary>
+    private const int EvenedPixels = 128;
+
     private readonly double[] _vacuum;
 
     /// <summary>Prepares a spectrum.</summary>
@@ -135,9 +138,33 @@ internal sealed class ResidualSpectrum
         ArrayPool<double>.Shared.Return(rented);
     }
 
+    /// <summary>
+    /// Weights for the correlation: those of the pixels, evened out over blocks, for the weights of photon noise rise in the
+    /// lines themselves; faded at the ends.
+    /// </summary>
     private void Fade(Span<double> faded)
     {
-        Weight.CopyTo(faded);
+        for (int start = 0; start < faded.Length; start += EvenedPixels)
+        {
+            int end = Math.Min(start + EvenedPixels, faded.Length);
+            double variance = 0.0;
+            int good = 0;
+            for (int i = start; i < end; i++)
+            {
+                if (Weight[i] > 0.0)
+                {
+                    variance += 1.0 / Weight[i];
+                    good++;
+                }
+            }
+
+            double even = good > 0 ? good / variance : 0.0;
+            for (int i = start; i < end; i++)
+            {
+                faded[i] = Weight[i] > 0.0 ? even : 0.0;
+            }
+        }
+
         int width = (int)(Taper * faded.Length);
         for (int i = 0; i < width; i++)
         {

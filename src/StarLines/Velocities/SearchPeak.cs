@@ -50,8 +50,14 @@ internal readonly record struct SearchPeak
         {
             return new SearchPeak
             {
-                Index = index, Lag = index - middle, Height = c[Math.Max(index, 0)], Width = double.NaN, ZuckerError = double.NaN,
-                Ratio = double.NaN, TonryDavisError = double.NaN, Significance = 0.0, AtEnd = true,
+                Index = index,
+                Lag = index - middle,
+                Height = c[Math.Max(index, 0)],
+                Width = double.NaN,
+                ZuckerError = double.NaN,
+                Ratio = double.NaN,
+                TonryDavisError = double.NaN,
+                AtEnd = true,
             };
         }
 
