@@ -50,6 +50,12 @@ public sealed class UnitSuffixRules
         ["Zero"] = "the offset of the true values of a FITS file, in their own unit",
         ["PeakHeight"] = "a correlation, −1 to 1",
         ["RValue"] = "a ratio (Tonry and Davis 1979)",
+        ["Correlation"] = "a coefficient, −1 to 1",
+        ["Significance"] = "a ratio to its standard deviation",
+        ["FalseAlarmProbability"] = "a probability",
+        ["Variance"] = "the square of the unit of its value",
+        ["Electrons"] = "the unit is the name",
+        ["MinimumDepth"] = "in units of the continuum",
     };
 
     [Fact]

@@ -101,6 +101,11 @@ public static class VelocityMeasurer
                     $"The file does not say whether its wavelengths are in air or vacuum; {(options.AssumedMedium == Medium.Vacuum ? "vacuum" : "air")} was assumed: give --medium.")));
             }
 
+            if (FrameRemark(spectrum.Scale.Frame) is Remark frame)
+            {
+                remarks.Add(frame);
+            }
+
             var residual = new ResidualSpectrum(spectrum, continuum, options.AssumedMedium);
             if (residual.Used < FewestPixels)
             {
@@ -111,5 +116,16 @@ public static class VelocityMeasurer
             CorrelationGrid grid = residual.GridFor(kept, options.SearchHalfRangeKmPerS);
             return new PreparedSpectrum(spectrum, residual, new CorrelationSearch(residual, grid), remarks);
         }
+
+        private static Remark? FrameRemark(VelocityFrame frame) => frame switch
+        {
+            VelocityFrame.Unknown => new Remark(
+                "frame-assumed", "The file does not say what its wavelengths were reduced to; topocentric was assumed: give --frame."),
+            VelocityFrame.Heliocentric => new Remark(
+                "heliocentric", "The wavelengths are reduced to the Sun, up to 15 m/s from the barycentre; the velocity is left so."),
+            VelocityFrame.Rest => new Remark(
+                "rest-frame", "The wavelengths are reduced to the rest frame of the star: the velocity is what remains."),
+            _ => null,
+        };
     }
 }

@@ -16,7 +16,7 @@ public sealed class VelocityResult
     }
 
     /// <summary>What was measured.</summary>
-    public VelocityMeasurement Measurement { get; private init; }
+    public VelocityMeasurement Measurement { get; }
 
     /// <summary>Name of the template.</summary>
     public string TemplateName => Measurement.Template;
@@ -26,6 +26,9 @@ public sealed class VelocityResult
 
     /// <summary>The weighted correlation coefficient at these velocities, −1 to 1.</summary>
     public ReadOnlySpan<double> Correlation => _correlation;
+
+    /// <summary>The frame of the spectrum.</summary>
+    public VelocityFrame Frame { get; internal init; }
 
     /// <summary>The velocity in the frame of the spectrum, km/s, before any reduction; its uncertainty covers noise and scatter of the lines.</summary>
     public Measured ObservedKmPerS { get; internal init; } = Measured.None;
@@ -68,12 +71,36 @@ public sealed class VelocityResult
         return Measurement.PeakHeight * Math.Exp(-4.0 * Math.Log(2.0) * u * u);
     }
 
+    /// <summary>
+    /// The result reduced to the barycentre of the solar system: factors 1 + z multiply, and the uncertainty stays. A spectrum
+    /// whose wavelengths were reduced before keeps its velocity; only the time is set.
+    /// </summary>
+    /// <param name="correction">The correction for the target, the site and the middle of the exposure.</param>
+    public VelocityResult Reduced(BarycentricResult correction)
+    {
+        ArgumentNullException.ThrowIfNull(correction);
+        bool moved = Frame is not (VelocityFrame.Topocentric or VelocityFrame.Unknown);
+        VelocityMeasurement reduced = Measurement with { BarycentricJdTdb = correction.BarycentricJdTdb };
+        if (!moved && ObservedKmPerS.HasValue)
+        {
+            reduced = reduced with
+            {
+                Status = VelocityStatus.Measured,
+                VelocityKmPerS = ObservedKmPerS with { Value = correction.ApplyKmPerS(ObservedKmPerS.Value) },
+                BarycentricCorrectionKmPerS = correction.CorrectionKmPerS,
+            };
+        }
+
+        return With(reduced, Second?.Reduced(correction));
+    }
+
     /// <summary>The same result with another measurement: reduced, or with more warnings.</summary>
     internal VelocityResult With(VelocityMeasurement measurement) => With(measurement, Second);
 
     /// <summary>The same result with another measurement and another second star.</summary>
     internal VelocityResult With(VelocityMeasurement measurement, VelocityResult? second) => new(measurement, _velocities, _correlation)
     {
+        Frame = Frame,
         ObservedKmPerS = ObservedKmPerS,
         PeakKmPerS = PeakKmPerS,
         TonryDavisErrorKmPerS = TonryDavisErrorKmPerS,

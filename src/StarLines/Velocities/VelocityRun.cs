@@ -188,13 +188,14 @@ internal sealed class VelocityRun
         double velocity = Velocity(shift);
         double perShift = KmPerShift(velocity);
         var observed = new Measured(velocity, sigma * perShift);
-        bool reduced = _spectrum.Scale.Frame == VelocityFrame.Barycentric;
+        bool reduced = _spectrum.Scale.Frame is VelocityFrame.Barycentric or VelocityFrame.Heliocentric or VelocityFrame.Rest;
         var measurement = new VelocityMeasurement
         {
             Template = _template.Name,
             Status = reduced ? VelocityStatus.Measured : VelocityStatus.Topocentric,
             VelocityKmPerS = reduced ? observed : Measured.None,
             TopocentricKmPerS = reduced ? double.NaN : velocity,
+            BarycentricCorrectionKmPerS = reduced ? _spectrum.Metadata.AppliedCorrectionKmPerS ?? double.NaN : double.NaN,
             PeakHeight = peak.Height,
             PeakFwhmKmPerS = peak.Width * _stepKmPerS,
             RValue = peak.Ratio,
@@ -205,6 +206,7 @@ internal sealed class VelocityRun
         };
         return new VelocityResult(measurement, Velocities(c.Length), c)
         {
+            Frame = _spectrum.Scale.Frame,
             ObservedKmPerS = observed,
             PeakKmPerS = new Measured(peakKmPerS, peak.ZuckerError * _search.Grid.LogStep * KmPerShift(peakKmPerS)),
             TonryDavisErrorKmPerS = peak.TonryDavisError * _stepKmPerS,
