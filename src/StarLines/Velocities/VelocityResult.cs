@@ -1,4 +1,5 @@
 using System;
+using StarLines.Velocities.Barycentre;
 
 namespace StarLines.Velocities;
 
