@@ -15,7 +15,7 @@ public sealed class UnitSuffixRules
     [
         "Angstrom", "Milliangstrom", "KmPerS", "MetresPerS", "Degrees", "Radians", "Seconds", "Days", "Years", "Metres", "Km",
         "Au", "Ev", "PerS", "PerKelvin", "Kelvin", "Pixels", "JdTdb", "JdTt", "JdUtc", "JdUt1", "Mjd", "Milliarcseconds",
-        "MilliarcsecondsPerYear", "JouleSeconds", "Coulomb", "Percent",
+        "MilliarcsecondsPerYear", "Mas", "MasPerYear", "JouleSeconds", "Coulomb", "Percent",
     ];
 
     /// <summary>Whole names that need no unit, and why.</summary>
@@ -49,6 +49,10 @@ public sealed class UnitSuffixRules
         ["Scale"] = "the factor between stored and true values of a FITS file, a ratio",
         ["Zero"] = "the offset of the true values of a FITS file, in their own unit",
         ["PeakHeight"] = "a correlation, −1 to 1",
+        ["Redshift"] = "a ratio",
+        ["BarycentricRedshift"] = "a ratio",
+        ["Airmass"] = "in units of the zenith",
+        ["EpochJulianYear"] = "the unit is the name",
         ["RValue"] = "a ratio (Tonry and Davis 1979)",
         ["Correlation"] = "a coefficient, −1 to 1",
         ["Significance"] = "a ratio to its standard deviation",

@@ -58,25 +58,25 @@ public static class LeapSeconds
     }
 
     /// <summary>Length of a day in UTC, seconds: 86 401 where it ends in a leap second, else 86 400.</summary>
-    /// <param name="midnightJd">Julian Date of the midnight with which the day begins; ends in .5.</param>
-    public static double DayLengthSeconds(double midnightJd)
+    /// <param name="midnightJdUtc">Julian Date of the midnight with which the day begins; ends in .5.</param>
+    public static double DayLengthSeconds(double midnightJdUtc)
     {
         // Found only where the next day is one with which a new offset begins; the first entry set the whole seconds, it was no leap second.
-        int index = Array.BinarySearch(StepJd, midnightJd + 1.0);
+        int index = Array.BinarySearch(StepJd, midnightJdUtc + 1.0);
         return index > 0 ? 86_401.0 : 86_400.0;
     }
 
     /// <summary>TAI − UTC for a midnight and a fraction of its day; the first offset before 1960.</summary>
-    internal static double TaiMinusUtcSeconds(double midnightJd, double fraction)
+    internal static double TaiMinusUtcSeconds(double midnightJdUtc, double fraction)
     {
-        int step = LastAtOrBefore(StepJd, midnightJd);
+        int step = LastAtOrBefore(StepJd, midnightJdUtc);
         if (step >= 0)
         {
             return Steps[step].Seconds;
         }
 
-        (_, _, double seconds, double sinceMjd, double perDay) = Rates[Math.Max(LastAtOrBefore(RateJd, midnightJd), 0)];
-        return seconds + ((midnightJd - UtcTime.ModifiedZero + fraction - sinceMjd) * perDay);
+        (_, _, double seconds, double sinceMjd, double perDay) = Rates[Math.Max(LastAtOrBefore(RateJd, midnightJdUtc), 0)];
+        return seconds + ((midnightJdUtc - UtcTime.ModifiedZero + fraction - sinceMjd) * perDay);
     }
 
     private static int LastAtOrBefore(double[] starts, double jd)

@@ -70,10 +70,10 @@ public static class UtcTime
 
     /// <summary>Reads a calendar date <c>YYYY-MM-DD</c>.</summary>
     /// <param name="text">The date.</param>
-    /// <param name="midnightJd">Julian Date of the midnight with which the day begins; ends in .5.</param>
-    public static bool TryParseDate(string? text, out double midnightJd)
+    /// <param name="midnightJdUtc">Julian Date of the midnight with which the day begins; ends in .5.</param>
+    public static bool TryParseDate(string? text, out double midnightJdUtc)
     {
-        midnightJd = 0.0;
+        midnightJdUtc = 0.0;
         string[] parts = (text ?? "").Trim().Split('-');
         if (parts.Length != 3 || parts[0].Length != 4
             || !TryDigits(parts[0], FirstYear, LastYear, out int year)
@@ -83,15 +83,15 @@ public static class UtcTime
             return false;
         }
 
-        midnightJd = MidnightJd(year, month, day);
+        midnightJdUtc = MidnightJd(year, month, day);
         return true;
     }
 
     /// <summary>The time of a date, hour, minute and second.</summary>
-    /// <param name="midnightJd">Julian Date of midnight, ends in .5.</param>
-    /// <param name="secondsOfDay">Seconds since midnight, leap second counted.</param>
-    public static JulianDate FromSecondsOfDay(double midnightJd, double secondsOfDay) =>
-        new(midnightJd, secondsOfDay / LeapSeconds.DayLengthSeconds(midnightJd));
+    /// <param name="midnightJdUtc">Julian Date of midnight, ends in .5.</param>
+    /// <param name="elapsedSeconds">Seconds since midnight, leap second counted.</param>
+    public static JulianDate FromSecondsOfDay(double midnightJdUtc, double elapsedSeconds) =>
+        new(midnightJdUtc, elapsedSeconds / LeapSeconds.DayLengthSeconds(midnightJdUtc));
 
     /// <summary>The time of a Modified Julian Date in UTC.</summary>
     /// <param name="mjdUtc">Modified Julian Date, days.</param>
