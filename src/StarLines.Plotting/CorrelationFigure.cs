@@ -13,6 +13,9 @@ public static class CorrelationFigure
 {
     private const int MostCurves = 12;
 
+    /// <summary>With more points around the peak only the line is drawn.</summary>
+    private const int MostPoints = 80;
+
     /// <summary>Half of the range around the peak, in widths of the peak.</summary>
     private const double ZoomWidths = 2.5;
 
@@ -97,6 +100,11 @@ public static class CorrelationFigure
 
         notes.AddRange(curve.Notes);
         items.Add(new Trace("", x, y, Pens.Data with { Width = 1f }, style: TraceStyle.Line));
+        if (end - first <= MostPoints)
+        {
+            items.Add(new ErrorPoints("", x, y, [], []));
+        }
+
         items.Add(new Note(Corner.TopLeft, notes));
         return new Panel
         {

@@ -146,7 +146,8 @@ public static class LineFigure
         {
             X = range,
             Y = new DataRange(-largest, largest),
-            YPitch = 1.9f,
+            YStep = 3.0,
+            YStepDivisions = 3,
             XLabel = wavelengthLabel,
             YLabel = first ? "(O − C)/σ" : "",
             Items =

@@ -55,11 +55,16 @@ public static class NormalizedFigure
             new MaskedRanges("masked", slice.FaultRanges()),
             new Trace("", slice.Wavelengths, flux, Pens.Masked, PixelSlice.WithNeighbours(slice.Masked, slice.Good)),
             new Trace("normalized flux", slice.Wavelengths, flux, Pens.Data, slice.Good),
-            new Band("±1σ", slice.Wavelengths, Array.ConvertAll(doubt, static s => 1 - s), Array.ConvertAll(doubt, static s => 1 + s), Ink.Continuum),
         };
         var ones = new double[slice.Count];
         Array.Fill(ones, 1.0);
-        ContinuumItems.Add(items, slice.Wavelengths, ones, continuum.Trusted.Slice(slice.Start, slice.Count).ToArray());
+        ContinuumItems.Add(
+            items,
+            slice.Wavelengths,
+            ones,
+            Array.ConvertAll(doubt, static s => 1 - s),
+            Array.ConvertAll(doubt, static s => 1 + s),
+            continuum.Trusted.Slice(slice.Start, slice.Count).ToArray());
         var marks = new List<LineMark>();
         foreach (LineMark line in lines)
         {

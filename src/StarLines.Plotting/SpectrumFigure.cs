@@ -83,8 +83,7 @@ public static class SpectrumFigure
             high[i] = level[i] + sigma[i];
         }
 
-        items.Add(new Band("±1σ", slice.Wavelengths, low, high, Ink.Continuum));
-        ContinuumItems.Add(items, slice.Wavelengths, level, trusted);
+        ContinuumItems.Add(items, slice.Wavelengths, level, low, high, trusted);
         DataRange levels = PlotRange.Robust(level, [], trusted);
         return y.Including(Math.Min(levels.Maximum, y.Maximum + (0.5 * y.Length)));
     }

@@ -27,22 +27,30 @@ internal sealed class ErrorPoints(string name, double[] x, double[] y, double[] 
         using SKPaint bar = new Pen(Ink.Faded, 0.8f).Paint(panel.Palette);
         using SKPaint fill = new() { Color = panel.Palette[Ink.Data], IsAntialias = true };
         using SKPaint ring = new Pen(Ink.Faded, 0.8f).Paint(panel.Palette);
+        using SKPath bars = ErrorBars(panel, first, end);
+        panel.Canvas.DrawPath(bars, bar);
         for (int i = first; i < end; i++)
         {
-            if (!double.IsFinite(Y[i]))
+            if (double.IsFinite(Y[i]))
             {
-                continue;
+                bool filled = Used.Length == 0 || Used[i];
+                panel.Canvas.DrawCircle(panel.X(X[i]), panel.Y(Y[i]), radius, filled ? fill : ring);
             }
-
-            float px = panel.X(X[i]);
-            float py = panel.Y(Y[i]);
-            if (Sigma.Length != 0 && Sigma[i] > 0)
-            {
-                panel.Canvas.DrawLine(px, panel.Y(Y[i] - Sigma[i]), px, panel.Y(Y[i] + Sigma[i]), bar);
-            }
-
-            bool filled = Used.Length == 0 || Used[i];
-            panel.Canvas.DrawCircle(px, py, radius, filled ? fill : ring);
         }
+    }
+
+    private SKPath ErrorBars(PanelCanvas panel, int first, int end)
+    {
+        SKPath path = new();
+        for (int i = first; i < end && Sigma.Length != 0; i++)
+        {
+            if (double.IsFinite(Y[i]) && Sigma[i] > 0)
+            {
+                path.MoveTo(panel.X(X[i]), panel.Y(Y[i] - Sigma[i]));
+                path.LineTo(panel.X(X[i]), panel.Y(Y[i] + Sigma[i]));
+            }
+        }
+
+        return path;
     }
 }

@@ -1,3 +1,4 @@
+using System;
 using System.Collections.Generic;
 using System.Linq;
 using ScottPlot;
@@ -9,6 +10,10 @@ namespace StarLines.Plotting.Drawing;
 internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float textSize, float deviceScale)
 {
     private const float Margin = 8f;
+    private const float NumberGap = 3f;
+
+    /// <summary>The share of an axis that its label may take; a longer one becomes smaller.</summary>
+    private const float LabelShare = 0.97f;
 
     internal void Paint(FigureContent content, string title, float width, float height)
     {
@@ -40,20 +45,23 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
         plot.DataBackground.Color = Colors.Transparent;
         plot.HideGrid();
         plot.Axes.SetLimits(placed.Panel.X.Minimum, placed.Panel.X.Maximum, placed.YAxis.Minimum, placed.YAxis.Maximum);
-        StyleAxis(plot.Axes.Bottom, placed.XTicks, placed.Panel.XLabel);
-        StyleAxis(plot.Axes.Left, placed.YTicks, placed.Panel.YLabel);
+        StyleAxis(plot.Axes.Bottom, placed.XTicks, placed.Panel.XLabel, frame.Width);
+        StyleAxis(plot.Axes.Left, placed.YTicks, placed.Panel.YLabel, frame.Height);
+        plot.Axes.Bottom.TickLabelStyle.OffsetY = NumberGap;
+        plot.Axes.Left.TickLabelStyle.OffsetX = -NumberGap;
+        plot.Axes.Left.TickLabelStyle.OffsetY = 0.1f * textSize;
         plot.Axes.FrameWidth(0.9f);
         plot.Axes.FrameColor(Color.FromSKColor(palette[Ink.Axis]));
         foreach (PanelItem item in placed.Panel.Items.Append(new FrameTicks(placed.XTicks.All, placed.YTicks.All)))
         {
-            plot.PlottableList.Add(new PlotItem(item, placed.Panel.X, placed.YAxis, palette, textSize, deviceScale));
+            plot.PlottableList.Add(new PlotItem(item, placed, palette, textSize, deviceScale));
         }
 
         plot.Layout.Fixed(new PixelRect(frame.Left, frame.Right, frame.Bottom, frame.Top));
         plot.Render(canvas, new PixelRect(0, frame.Right + 4, frame.Bottom + (4 * textSize), 0));
     }
 
-    private void StyleAxis(IAxis axis, Ticks ticks, string label)
+    private void StyleAxis(IAxis axis, Ticks ticks, string label, float length)
     {
         Color colour = Color.FromSKColor(palette[Ink.Axis]);
         axis.TickGenerator = ticks;
@@ -68,6 +76,8 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
             style.SubpixelText = true;
         }
 
+        using SKFont font = FigureText.Font(textSize);
+        axis.Label.FontSize = textSize * Math.Min(1f, LabelShare * length / Math.Max(1f, font.MeasureText(label)));
         axis.Label.Text = label;
         axis.Label.IsVisible = label.Length != 0;
     }

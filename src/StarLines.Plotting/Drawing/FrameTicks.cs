@@ -9,24 +9,35 @@ internal sealed class FrameTicks(Tick[] xTicks, Tick[] yTicks) : PanelItem("")
     private const float Major = 5.5f;
     private const float Minor = 3f;
 
+    internal override bool UsesBand => true;
+
     internal override void Draw(PanelCanvas panel)
     {
         SKRect frame = panel.Frame;
-        using SKPaint paint = new Pen(Ink.Axis, 0.8f).Paint(panel.Palette);
+        using SKPath path = new();
         foreach (Tick tick in xTicks)
         {
             float x = panel.X(tick.Position);
             float length = tick.IsMajor ? Major : Minor;
-            panel.Canvas.DrawLine(x, frame.Bottom, x, frame.Bottom - length, paint);
-            panel.Canvas.DrawLine(x, frame.Top, x, frame.Top + length, paint);
+            AddLine(path, x, frame.Bottom, x, frame.Bottom - length);
+            AddLine(path, x, frame.Top, x, frame.Top + length);
         }
 
         foreach (Tick tick in yTicks)
         {
             float y = panel.Y(tick.Position);
             float length = tick.IsMajor ? Major : Minor;
-            panel.Canvas.DrawLine(frame.Left, y, frame.Left + length, y, paint);
-            panel.Canvas.DrawLine(frame.Right, y, frame.Right - length, y, paint);
+            AddLine(path, frame.Left, y, frame.Left + length, y);
+            AddLine(path, frame.Right, y, frame.Right - length, y);
         }
+
+        using SKPaint paint = new Pen(Ink.Axis, 0.8f).Paint(panel.Palette);
+        panel.Canvas.DrawPath(path, paint);
+    }
+
+    private static void AddLine(SKPath path, float x0, float y0, float x1, float y1)
+    {
+        path.MoveTo(x0, y0);
+        path.LineTo(x1, y1);
     }
 }

@@ -32,6 +32,8 @@ internal sealed class LineLabels : PanelItem
     /// <summary>The lines in order of wavelength.</summary>
     internal IReadOnlyList<LineMark> Marks { get; }
 
+    internal override bool UsesBand => true;
+
     internal override float BandHeight(DataRange x, SKRect frame, float textSize)
     {
         using SKFont font = FigureText.Font(textSize * RelativeSize);

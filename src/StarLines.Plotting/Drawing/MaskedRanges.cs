@@ -11,6 +11,8 @@ internal sealed class MaskedRanges(string name, IReadOnlyList<DataRange> ranges)
 
     internal IReadOnlyList<DataRange> Ranges { get; } = ranges;
 
+    internal override bool UsesBand => true;
+
     internal override LegendSample? Sample => new(Fill: Ink.Shade);
 
     /// <summary>Leaves out the items that have nothing to show, so that the legend does not name them.</summary>

@@ -30,6 +30,8 @@ internal sealed class Note(Corner corner, IReadOnlyList<string> lines, float rel
 
     internal Corner Corner { get; } = corner;
 
+    internal override bool UsesBand => true;
+
     internal override float BandHeight(DataRange x, SKRect frame, float textSize) =>
         Corner is Corner.TopLeft or Corner.TopRight ? (Lines.Count * LineHeight * relativeSize * textSize) + Margin : 0f;
 

@@ -23,6 +23,12 @@ internal sealed class Panel
     /// <summary>Distance between two numbers of the vertical axis, in text heights.</summary>
     internal float YPitch { get; init; } = 3.2f;
 
+    /// <summary>The step between the numbers of the vertical axis, or 0 to find one.</summary>
+    internal double YStep { get; init; }
+
+    /// <summary>The parts into which ticks cut <see cref="YStep"/>.</summary>
+    internal int YStepDivisions { get; init; } = 1;
+
     internal required IReadOnlyList<PanelItem> Items { get; init; }
 
     internal Panel WithXLabel(string label) => new()
@@ -34,6 +40,8 @@ internal sealed class Panel
         YExponent = YExponent,
         Weight = Weight,
         YPitch = YPitch,
+        YStep = YStep,
+        YStepDivisions = YStepDivisions,
         Items = Items,
     };
 }

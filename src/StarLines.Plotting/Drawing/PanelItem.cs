@@ -1,4 +1,5 @@
 using System.Collections.Generic;
+using System.Linq;
 using SkiaSharp;
 
 namespace StarLines.Plotting.Drawing;
@@ -12,6 +13,9 @@ internal abstract class PanelItem(string name)
     /// <summary>The sample in the legend.</summary>
     internal virtual LegendSample? Sample => null;
 
+    /// <summary>Whether the item draws in the band above the data too; what shows data does not.</summary>
+    internal virtual bool UsesBand => false;
+
     /// <summary>Height above the data that the item wants for itself, units of the figure.</summary>
     /// <param name="x">The range of the axis.</param>
     /// <param name="frame">The frame of the panel.</param>
@@ -22,7 +26,15 @@ internal abstract class PanelItem(string name)
 }
 
 /// <summary>What stands beside the words of a legend.</summary>
-internal sealed record LegendSample(Pen? Line = null, Ink? Fill = null, bool Point = false);
+internal sealed record LegendSample(Pen? Line = null, Ink? Fill = null, bool Point = false)
+{
+    /// <summary>Measured things come first, then lines, areas, and last what is not used.</summary>
+    internal int Rank =>
+        Point || Line is { Ink: Ink.Data } ? 0
+        : Fill == Ink.Shade ? 4
+        : Fill is not null ? 2
+        : Line is { Dash: Dash.Solid } ? 1 : 3;
+}
 
 /// <summary>One entry of a legend.</summary>
 internal sealed record LegendEntry(string Name, LegendSample Sample)
@@ -39,6 +51,6 @@ internal sealed record LegendEntry(string Name, LegendSample Sample)
             }
         }
 
-        return entries;
+        return [.. entries.OrderBy(entry => entry.Sample.Rank)];
     }
 }

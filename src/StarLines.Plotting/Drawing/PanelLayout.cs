@@ -5,7 +5,7 @@ using SkiaSharp;
 namespace StarLines.Plotting.Drawing;
 
 /// <summary>A panel with its place on the canvas, the range its vertical axis shows and its ticks.</summary>
-internal sealed record PlacedPanel(Panel Panel, SKRect Frame, DataRange YAxis, Ticks XTicks, Ticks YTicks);
+internal sealed record PlacedPanel(Panel Panel, SKRect Frame, DataRange YAxis, float Band, Ticks XTicks, Ticks YTicks);
 
 /// <summary>Finds the places of the panels of a figure, so that frames in a row and in a column are in line.</summary>
 internal sealed class PanelLayout(FigureContent content, SKRect area, float textSize)
@@ -120,8 +120,11 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
             panel,
             frame,
             y,
-            new Ticks(panel.X, frame.Width, 6.5f * textSize, labelled: numbersBelow),
-            new Ticks(y, frame.Height, panel.YPitch * textSize, panel.YExponent));
+            band,
+            Ticks.Across(panel.X, frame.Width, textSize, numbersBelow),
+            panel.YStep > 0
+                ? new Ticks(y, panel.YStep, panel.YStepDivisions)
+                : Ticks.Upwards(y, frame.Height, panel.YPitch * textSize, panel.YExponent));
     }
 
     /// <summary>Sets the room to the left of each column to what its numbers and label need.</summary>
@@ -142,7 +145,7 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
                 }
 
                 float label = placed[at].Panel.YLabel.Length == 0 ? 0f : _labelHeight;
-                _leftPads[column] = Math.Max(_leftPads[column], widest + label + (0.6f * textSize));
+                _leftPads[column] = Math.Max(_leftPads[column], widest + label + (0.7f * textSize));
             }
         }
     }

@@ -27,11 +27,10 @@ internal readonly record struct Pen(Ink Ink, float Width, Dash Dash = Dash.Solid
             IsStroke = true,
             IsAntialias = true,
             StrokeJoin = SKStrokeJoin.Round,
-            StrokeCap = Dash == Dash.Dotted ? SKStrokeCap.Round : SKStrokeCap.Butt,
         };
         if (Dash != Dash.Solid)
         {
-            float[] intervals = Dash == Dash.Dashed ? [5f, 3.5f] : [0.1f, 3f];
+            float[] intervals = Dash == Dash.Dashed ? [5f, 3.5f] : [1.2f, 2.4f];
             paint.PathEffect = SKPathEffect.CreateDash(intervals, 0);
         }
 

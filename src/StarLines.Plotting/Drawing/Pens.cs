@@ -9,6 +9,8 @@ internal static class Pens
 
     internal static Pen Continuum { get; } = new(Ink.Continuum, 1.4f);
 
+    internal static Pen BandEdge { get; } = new(Ink.Continuum, 0.5f);
+
     internal static Pen DoubtfulContinuum { get; } = new(Ink.Continuum, 1.4f, Dash.Dashed);
 
     internal static Pen Model { get; } = new(Ink.Model, 1.5f);

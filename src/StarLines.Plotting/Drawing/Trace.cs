@@ -62,7 +62,8 @@ internal sealed class Trace : PanelItem
             return;
         }
 
-        using SKPath path = new();
+        using SKPaint paint = Pen.Paint(panel.Palette);
+        using var path = new ChunkedPath(panel.Canvas, paint);
         double width = Math.Abs(panel.X(X[end - 1]) - panel.X(X[first])) / Math.Max(1, end - first - 1);
         if (Style == TraceStyle.Pixels && width >= StepWidth)
         {
@@ -73,8 +74,6 @@ internal sealed class Trace : PanelItem
             AddLine(path, panel, first, end);
         }
 
-        using SKPaint paint = Pen.Paint(panel.Palette);
-        panel.Canvas.DrawPath(path, paint);
     }
 
     /// <summary>The first index whose value is not below the limit.</summary>
@@ -84,7 +83,7 @@ internal sealed class Trace : PanelItem
         return found >= 0 ? found : ~found;
     }
 
-    private void AddSteps(SKPath path, PanelCanvas panel, int first, int end)
+    private void AddSteps(ChunkedPath path, PanelCanvas panel, int first, int end)
     {
         bool open = false;
         for (int i = first; i < end; i++)
@@ -112,7 +111,7 @@ internal sealed class Trace : PanelItem
         }
     }
 
-    private void AddLine(SKPath path, PanelCanvas panel, int first, int end)
+    private void AddLine(ChunkedPath path, PanelCanvas panel, int first, int end)
     {
         var column = new Column(path, panel.DeviceScale);
         for (int i = first; i < end; i++)
@@ -131,7 +130,7 @@ internal sealed class Trace : PanelItem
     }
 
     /// <summary>Gathers the points of one column of device pixels and hands on at most four of them.</summary>
-    private struct Column(SKPath path, float deviceScale)
+    private struct Column(ChunkedPath path, float deviceScale)
     {
         private bool _open;
         private int _count;
@@ -197,12 +196,11 @@ internal sealed class Trace : PanelItem
         {
             if (_open)
             {
-                path.LineTo(point);
+                path.LineTo(point.X, point.Y);
             }
             else
             {
-                path.MoveTo(point);
-                path.LineTo(point);
+                path.MoveTo(point.X, point.Y);
                 _open = true;
             }
         }
