@@ -76,6 +76,7 @@ public static class CorrelationFigure
             Y = Extent(y).Including(0.0).Padded(0.06, 0.06),
             XLabel = label,
             YLabel = "Correlation",
+            YPitch = 2.4f,
             Items = items,
         };
     }
@@ -111,6 +112,7 @@ public static class CorrelationFigure
             X = zoom,
             Y = Extent(y.AsSpan(first, end - first)).Padded(0.06, 0.08),
             XLabel = label,
+            YPitch = 2.4f,
             Items = items,
         };
     }

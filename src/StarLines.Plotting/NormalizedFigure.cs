@@ -80,6 +80,7 @@ public static class NormalizedFigure
             X = range,
             Y = PlotRange.Robust(flux, sigma, slice.Good).Including(1.0).Padded(0.05, 0.05),
             XLabel = xLabel,
+            YPitch = StripLayout.YPitch,
             YLabel = "Normalized flux",
             Items = MaskedRanges.OmitEmpty(items),
         };

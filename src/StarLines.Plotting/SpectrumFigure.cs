@@ -65,6 +65,7 @@ public static class SpectrumFigure
             Y = y,
             YExponent = exponent,
             XLabel = xLabel,
+            YPitch = StripLayout.YPitch,
             YLabel = UnitText.FluxLabel(spectrum.FluxUnit, exponent),
             Items = MaskedRanges.OmitEmpty(items),
         };

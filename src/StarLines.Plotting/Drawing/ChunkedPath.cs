@@ -8,7 +8,7 @@ namespace StarLines.Plotting.Drawing;
 /// </summary>
 internal sealed class ChunkedPath(SKCanvas canvas, SKPaint paint) : IDisposable
 {
-    private const int Most = 128;
+    private const int Most = 40;
 
     private readonly SKPath _path = new();
     private SKPoint _last;

@@ -12,15 +12,14 @@ internal static class ContinuumItems
     internal static void Add(
         List<PanelItem> items, double[] wavelengths, double[] level, double[] low, double[] high, bool[] trusted)
     {
-        items.Insert(0, new Band("continuum ±1σ", wavelengths, low, high, Ink.Continuum));
-        items.Add(new Trace("", wavelengths, low, Pens.BandEdge, style: TraceStyle.Line));
-        items.Add(new Trace("", wavelengths, high, Pens.BandEdge, style: TraceStyle.Line));
+        items.Insert(0, new Band("±1σ", wavelengths, low, high, Ink.Continuum));
+        items.Add(new BandEdges(wavelengths, low, high));
         items.Add(new Trace("continuum", wavelengths, level, Pens.Continuum, trusted, TraceStyle.Line));
         if (Array.IndexOf(trusted, false) >= 0)
         {
             bool[] doubtful = Array.ConvertAll(trusted, static flag => !flag);
             items.Add(new Trace(
-                "not to be trusted", wavelengths, level, Pens.DoubtfulContinuum, PixelSlice.WithNeighbours(doubtful, trusted), TraceStyle.Line));
+                "uncertain", wavelengths, level, Pens.DoubtfulContinuum, PixelSlice.WithNeighbours(doubtful, trusted), TraceStyle.Line));
         }
     }
 }

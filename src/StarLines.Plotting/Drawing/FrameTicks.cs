@@ -6,7 +6,9 @@ namespace StarLines.Plotting.Drawing;
 /// <summary>Tick marks that point inwards on all four sides of the frame.</summary>
 internal sealed class FrameTicks(Tick[] xTicks, Tick[] yTicks) : PanelItem("")
 {
-    private const float Major = 5.5f;
+    /// <summary>Length of the marks that have a number, units of the figure.</summary>
+    internal const float Major = 5.5f;
+
     private const float Minor = 3f;
 
     internal override bool UsesBand => true;

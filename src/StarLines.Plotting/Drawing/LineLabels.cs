@@ -47,7 +47,7 @@ internal sealed class LineLabels : PanelItem
             }
         }
 
-        return longest == 0f ? 0f : longest + TickLength + LeaderHeight + (2.5f * Margin);
+        return longest == 0f ? 0f : longest + TickLength + LeaderHeight + (2f * Margin) + FrameTicks.Major;
     }
 
     /// <summary>Where the middles of the names lie across the canvas; NaN for a line without.</summary>

@@ -37,7 +37,7 @@ internal sealed class Note(Corner corner, IReadOnlyList<string> lines, float rel
 
     internal override void Draw(PanelCanvas panel)
     {
-        using SKFont font = panel.Font(relativeSize);
+        using SKFont font = Fitting(panel);
         bool right = Corner is Corner.TopRight or Corner.BottomRight;
         bool bottom = Corner is Corner.BottomLeft or Corner.BottomRight;
         float step = LineHeight * font.Size;
@@ -57,5 +57,22 @@ internal sealed class Note(Corner corner, IReadOnlyList<string> lines, float rel
             FigureText.Draw(
                 panel.Canvas, Lines[i], x, top + (step * i) + (0.95f * font.Size), right ? SKTextAlign.Right : SKTextAlign.Left, font, panel.Palette[ink]);
         }
+    }
+
+    /// <summary>The font, smaller where the widest line would not fit.</summary>
+    private SKFont Fitting(PanelCanvas panel)
+    {
+        SKFont font = panel.Font(relativeSize);
+        float room = panel.Frame.Width - (2 * Margin);
+        foreach (string line in Lines)
+        {
+            float width = font.MeasureText(line);
+            if (width > room)
+            {
+                font.Size *= room / width;
+            }
+        }
+
+        return font;
     }
 }

@@ -21,7 +21,7 @@ internal sealed class Panel
     internal float Weight { get; init; } = 1f;
 
     /// <summary>Distance between two numbers of the vertical axis, in text heights.</summary>
-    internal float YPitch { get; init; } = 3.2f;
+    internal float YPitch { get; init; } = 3f;
 
     /// <summary>The step between the numbers of the vertical axis, or 0 to find one.</summary>
     internal double YStep { get; init; }

@@ -13,6 +13,9 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
     private const float Gap = 6f;
     private const float StackGap = 0f;
 
+    /// <summary>A number this close to the frame of the panel below would touch the numbers there, text heights.</summary>
+    private const float HalfNumber = 0.6f;
+
     /// <summary>Room for the numbers before they have been measured, text heights.</summary>
     private const float FirstGuess = 4f;
 
@@ -116,15 +119,16 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
         band = Math.Min(band, 0.5f * frame.Height);
         var y = new DataRange(
             panel.Y.Minimum, panel.Y.Minimum + (panel.Y.Length * frame.Height / (frame.Height - band)));
-        return new PlacedPanel(
-            panel,
-            frame,
-            y,
-            band,
-            Ticks.Across(panel.X, frame.Width, textSize, numbersBelow),
-            panel.YStep > 0
-                ? new Ticks(y, panel.YStep, panel.YStepDivisions)
-                : Ticks.Upwards(y, frame.Height, panel.YPitch * textSize, panel.YExponent));
+        Ticks yTicks = panel.YStep > 0
+            ? new Ticks(y, panel.YStep, panel.YStepDivisions)
+            : Ticks.Upwards(y, frame.Height, panel.YPitch * textSize, panel.YExponent);
+        yTicks = yTicks.Below(y.Maximum - (y.Length * band / frame.Height));
+        if (!numbersBelow)
+        {
+            yTicks = yTicks.WithoutNumbersBelow(y.Minimum + (y.Length * HalfNumber * textSize / frame.Height));
+        }
+
+        return new PlacedPanel(panel, frame, y, band, Ticks.Across(panel.X, frame.Width, textSize, numbersBelow), yTicks);
     }
 
     /// <summary>Sets the room to the left of each column to what its numbers and label need.</summary>
@@ -145,7 +149,7 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
                 }
 
                 float label = placed[at].Panel.YLabel.Length == 0 ? 0f : _labelHeight;
-                _leftPads[column] = Math.Max(_leftPads[column], widest + label + (0.7f * textSize));
+                _leftPads[column] = Math.Max(_leftPads[column], widest + label + (0.9f * textSize));
             }
         }
     }

@@ -26,7 +26,7 @@ internal readonly record struct Pen(Ink Ink, float Width, Dash Dash = Dash.Solid
             StrokeWidth = Width,
             IsStroke = true,
             IsAntialias = true,
-            StrokeJoin = SKStrokeJoin.Round,
+            StrokeJoin = Width < 1f ? SKStrokeJoin.Bevel : SKStrokeJoin.Round,
         };
         if (Dash != Dash.Solid)
         {

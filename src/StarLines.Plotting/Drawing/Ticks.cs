@@ -45,6 +45,13 @@ internal sealed class Ticks : ITickGenerator
         All = [.. ticks];
     }
 
+    private Ticks(Ticks other, Tick[] all)
+    {
+        _exponent = other._exponent;
+        _format = other._format;
+        All = all;
+    }
+
     /// <inheritdoc/>
     Tick[] ITickGenerator.Ticks => All;
 
@@ -86,6 +93,13 @@ internal sealed class Ticks : ITickGenerator
         (double step, int divisions) = NiceStep(range.Length * pitch / length);
         return new Ticks(range, step, divisions, exponent);
     }
+
+    /// <summary>The ticks that do not lie above a value.</summary>
+    internal Ticks Below(double limit) => new(this, Array.FindAll(All, tick => tick.Position <= limit));
+
+    /// <summary>The same ticks; those below a value have no number.</summary>
+    internal Ticks WithoutNumbersBelow(double limit) => new(
+        this, Array.ConvertAll(All, tick => tick.IsMajor && tick.Position < limit ? Tick.Major(tick.Position, "") : tick));
 
     /// <summary>Does nothing: the ticks were made for the range that is drawn.</summary>
     public void Regenerate(CoordinateRange range, Edge edge, PixelLength size, Paint paint, LabelStyle labelStyle)

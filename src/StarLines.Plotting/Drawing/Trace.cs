@@ -11,6 +11,9 @@ internal enum TraceStyle
 
     /// <summary>Straight lines.</summary>
     Line,
+
+    /// <summary>A smooth curve through points that are far enough apart to be seen.</summary>
+    Smooth,
 }
 
 /// <summary>
@@ -21,6 +24,9 @@ internal sealed class Trace : PanelItem
 {
     /// <summary>Pixels at least this wide, in units of the figure, are drawn as steps.</summary>
     private const double StepWidth = 4.0;
+
+    /// <summary>Straight pieces between two points of a smooth curve.</summary>
+    private const int SmoothParts = 8;
 
     private readonly bool[] _shown;
 
@@ -69,6 +75,10 @@ internal sealed class Trace : PanelItem
         {
             AddSteps(path, panel, first, end);
         }
+        else if (Style == TraceStyle.Smooth && width >= StepWidth)
+        {
+            AddSmooth(path, panel, first, end);
+        }
         else
         {
             AddLine(path, panel, first, end);
@@ -109,6 +119,45 @@ internal sealed class Trace : PanelItem
             path.LineTo(right, y);
             open = true;
         }
+    }
+
+    /// <summary>The cubic through each pair of neighbours whose slopes are those between the points around them (Catmull and Rom 1974).</summary>
+    private void AddSmooth(ChunkedPath path, PanelCanvas panel, int first, int end)
+    {
+        bool open = false;
+        for (int i = first; i < end; i++)
+        {
+            if (!IsShown(i))
+            {
+                open = false;
+                continue;
+            }
+
+            if (!open)
+            {
+                path.MoveTo(panel.X(X[i]), panel.Y(Y[i]));
+                open = true;
+                continue;
+            }
+
+            double width = X[i] - X[i - 1];
+            double start = Slope(i - 1) * width;
+            double stop = Slope(i) * width;
+            for (int k = 1; k <= SmoothParts; k++)
+            {
+                double t = (double)k / SmoothParts;
+                double u = 1 - t;
+                double y = (u * u * (1 + (2 * t)) * Y[i - 1]) + (u * u * t * start) + (t * t * (3 - (2 * t)) * Y[i]) - (t * t * u * stop);
+                path.LineTo(panel.X(X[i - 1] + (t * width)), panel.Y(y));
+            }
+        }
+    }
+
+    private double Slope(int i)
+    {
+        int before = i > 0 && IsShown(i - 1) ? i - 1 : i;
+        int after = i + 1 < X.Length && IsShown(i + 1) ? i + 1 : i;
+        return after > before ? (Y[after] - Y[before]) / (X[after] - X[before]) : 0.0;
     }
 
     private void AddLine(ChunkedPath path, PanelCanvas panel, int first, int end)
