@@ -46,6 +46,9 @@ public sealed class Table
     /// <summary>Number of rows.</summary>
     public int RowCount => _columns[0].Count;
 
+    /// <summary>Lines of the rows in the text they were read from; null where there are none.</summary>
+    internal int[]? Lines { get; init; }
+
     /// <summary>The column of a name.</summary>
     /// <param name="name">The name, told apart by case.</param>
     /// <returns>The column.</returns>
@@ -63,6 +66,11 @@ public sealed class Table
         column = _indices.TryGetValue(name, out int index) ? _columns[index] : null;
         return column is not null;
     }
+
+    /// <summary>Where a row stands in the text it was read from, for messages.</summary>
+    /// <param name="rowIndex">Row, from 0.</param>
+    /// <returns>Line, from 1; 0 where the table was not read from ECSV or CSV.</returns>
+    public int LineNumberOf(int rowIndex) => Lines is int[] lines ? lines[rowIndex] : 0;
 
     /// <summary>Joins tables of the same columns end to end; metadata and notes of the columns are those of the first.</summary>
     /// <param name="tables">The tables, at least one.</param>

@@ -4,6 +4,9 @@ using System.IO.Compression;
 using System.Text;
 using StarLines.Tables.Delimited;
 using StarLines.Tables.Ecsv;
+using StarLines.Tables.Json;
+using StarLines.Tables.Parquet;
+using StarLines.Tables.VoTables;
 
 namespace StarLines.Tables;
 
@@ -27,6 +30,9 @@ public static class TableReader
         {
             TableFormat.Ecsv => EcsvReader.Read(bytes, name),
             TableFormat.Csv => CsvReader.Read(bytes, name),
+            TableFormat.Json => JsonTableReader.Read(bytes, name),
+            TableFormat.VoTable => VoTableReader.Read(bytes, name),
+            TableFormat.Parquet => ParquetTableReader.Read(bytes, name),
             _ => throw new ArgumentException($"Tables are not read as {format}.", nameof(format)),
         };
     }

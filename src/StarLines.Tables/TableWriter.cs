@@ -1,7 +1,11 @@
 using System;
 using System.IO;
+using StarLines.Tables.Aligned;
 using StarLines.Tables.Delimited;
 using StarLines.Tables.Ecsv;
+using StarLines.Tables.Json;
+using StarLines.Tables.Parquet;
+using StarLines.Tables.VoTables;
 
 namespace StarLines.Tables;
 
@@ -29,6 +33,18 @@ public static class TableWriter
                 break;
             case TableFormat.Csv:
                 CsvWriter.Write(table, stream);
+                break;
+            case TableFormat.Json:
+                JsonTableWriter.Write(table, stream);
+                break;
+            case TableFormat.VoTable:
+                VoTableWriter.Write(table, stream);
+                break;
+            case TableFormat.Parquet:
+                ParquetTableWriter.Write(table, stream);
+                break;
+            case TableFormat.Aligned:
+                AlignedWriter.Write(table, stream);
                 break;
             default:
                 throw new ArgumentException($"Tables are not written as {format}.", nameof(format));

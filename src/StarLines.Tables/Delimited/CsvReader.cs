@@ -34,7 +34,7 @@ internal static class CsvReader
             columns[c] = ColumnReader.Read(text, c, names[c], ColumnReader.TypeOf(text, c, quotesMeanText), source);
         }
 
-        return new Table(columns, CsvHeader.Metadata(text.Comments));
+        return new Table(columns, CsvHeader.Metadata(text.Comments)) { Lines = [.. text.Lines] };
     }
 
     /// <summary>Every record has one cell a name; one empty cell more at the end of every record, from a separator there, is passed over.</summary>

@@ -35,10 +35,10 @@ internal static class EcsvReader
             columns[c] = ReadColumn(text, c, declared.Items[c].Map, separator == (byte)' ', source);
         }
 
-        return MakeTable(columns, header, source);
+        return MakeTable(columns, header, [.. text.Lines], source);
     }
 
-    private static Table MakeTable(TableColumn[] columns, TableMetadata header, string source)
+    private static Table MakeTable(TableColumn[] columns, TableMetadata header, int[] lines, string source)
     {
         TableMetadata metadata = header.TryGetValue("meta", out MetadataValue? meta) ? meta.Map : [];
 
@@ -46,7 +46,7 @@ internal static class EcsvReader
         metadata.Remove("__serialized_columns__");
         try
         {
-            return new Table(columns, metadata);
+            return new Table(columns, metadata) { Lines = lines };
         }
         catch (ArgumentException exception)
         {

@@ -247,8 +247,12 @@ internal static class YamlScanner
             return whole;
         }
 
+        // YAML 1.1: a real number has a point, and its exponent a sign; anything else is text.
+        int exponent = text.AsSpan().IndexOfAny('e', 'E');
+        bool isReal = text.Contains('.', StringComparison.Ordinal)
+            && (exponent < 0 || (exponent + 1 < text.Length && text[exponent + 1] is '-' or '+'));
         const NumberStyles Style = NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint | NumberStyles.AllowExponent;
-        return double.TryParse(text, Style, CultureInfo.InvariantCulture, out double real) ? real : text;
+        return isReal && double.TryParse(text, Style, CultureInfo.InvariantCulture, out double real) ? real : text;
     }
 
     /// <summary>Index after the closing quote; −1 where there is none.</summary>
