@@ -46,6 +46,11 @@ public sealed partial class FitsHeader
             return;
         }
 
+        if (KeywordCode.IsLowered(CardBytesAt(index)))
+        {
+            context.Warn("lower-case-keyword", KeywordAt(index), $"The keyword {KeywordAt(index)} is written in lower-case letters.");
+        }
+
         CardFields fields = FieldsAt(index);
         if (fields.Fault is not null)
         {

@@ -50,6 +50,9 @@ internal static class KeywordCode
         return lower == 0 ? code : Raise(code);
     }
 
+    /// <summary>Whether the keyword of a card has lower-case letters.</summary>
+    internal static bool IsLowered(ReadOnlySpan<byte> card) => OfCard(card) != BinaryPrimitives.ReadUInt64LittleEndian(card);
+
     private static ulong Raise(ulong code)
     {
         for (int shift = 0; shift < 64; shift += 8)
