@@ -1,4 +1,5 @@
 using System;
+using System.Buffers;
 using System.IO;
 using Microsoft.Win32.SafeHandles;
 
@@ -28,6 +29,31 @@ internal abstract class ByteSource : IDisposable
 
         public override void Dispose()
         {
+        }
+    }
+
+    /// <summary>A file that was read whole into a borrowed array, which goes back when the file is disposed: a fresh large array for each spectrum of many costs more than reading it.</summary>
+    internal sealed class Pooled(byte[] bytes, int length) : ByteSource
+    {
+        private byte[]? bytes = bytes;
+
+        internal override long Length => length;
+
+        internal override bool InMemory => true;
+
+        internal override ReadOnlyMemory<byte> Read(long offset, int count)
+        {
+            ObjectDisposedException.ThrowIf(bytes is null, typeof(FitsFile));
+            return bytes.AsMemory(0, length).Slice((int)offset, count);
+        }
+
+        public override void Dispose()
+        {
+            if (bytes is not null)
+            {
+                ArrayPool<byte>.Shared.Return(bytes);
+                bytes = null;
+            }
         }
     }
 

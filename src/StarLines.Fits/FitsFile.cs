@@ -86,7 +86,7 @@ public sealed class FitsFile : IDisposable
         return null;
     }
 
-    /// <inheritdoc/>
+    /// <summary>Gives the memory and the open file back. Headers and warnings stay readable, images and tables do not.</summary>
     public void Dispose() => source.Dispose();
 
     internal static FitsFile Open(ByteSource source, string name, FitsOptions options)

@@ -26,7 +26,9 @@ internal static class HeaderScanner
 
         int bytes = codes.Count * CardText.CardBytes;
         dataOffset = offset + RoundUp(bytes + CardText.CardBytes);
-        return new FitsHeader(context, source.Read(offset, bytes), [.. codes]);
+
+        // The header keeps its own copy, as it may outlive the open file.
+        return new FitsHeader(context, source.Read(offset, bytes).ToArray(), [.. codes]);
     }
 
     internal static long RoundUp(long bytes) => (bytes + CardText.BlockBytes - 1) / CardText.BlockBytes * CardText.BlockBytes;

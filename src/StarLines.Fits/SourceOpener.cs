@@ -1,4 +1,5 @@
 using System;
+using System.Buffers;
 using System.Globalization;
 using System.IO;
 using System.IO.Compression;
@@ -40,10 +41,11 @@ internal static class SourceOpener
             }
 
             RefuseLonger(length, Math.Max(WholeFileBytes, options.MaximumStreamBytes), path, nameof(FitsOptions.MaximumStreamBytes));
-            byte[] bytes = GC.AllocateUninitializedArray<byte>((int)length);
-            ByteSource.ReadExactly(handle, bytes, 0);
+            byte[] bytes = ArrayPool<byte>.Shared.Rent((int)length);
+            ByteSource.Pooled whole = new(bytes, (int)length);
+            ByteSource.ReadExactly(handle, bytes.AsSpan(0, (int)length), 0);
             handle.Dispose();
-            return FromMemory(bytes, path, options);
+            return IsGzip(start) ? Unpacked(whole, path, options) : whole;
         }
         catch
         {
@@ -57,6 +59,14 @@ internal static class SourceOpener
 
     internal static ByteSource FromMemory(ReadOnlyMemory<byte> bytes, string name, FitsOptions options) =>
         new ByteSource.Memory(IsGzip(bytes.Span) ? Gunzip(bytes, name, options) : bytes);
+
+    private static ByteSource.Memory Unpacked(ByteSource.Pooled whole, string path, FitsOptions options)
+    {
+        using (whole)
+        {
+            return new ByteSource.Memory(Gunzip(whole.Read(0, (int)whole.Length), path, options));
+        }
+    }
 
     private static bool IsGzip(ReadOnlySpan<byte> bytes) => bytes.Length >= 2 && bytes[0] == 0x1F && bytes[1] == 0x8B;
 

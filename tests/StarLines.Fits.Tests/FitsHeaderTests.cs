@@ -130,6 +130,16 @@ public sealed class FitsHeaderTests
     public void A_missing_file_is_an_IO_error() =>
         Assert.Throws<FileNotFoundException>(() => FitsFile.Open(Path.Combine(Path.GetTempPath(), "no-such-file.fits")));
 
+    [Fact]
+    public void Data_cannot_be_read_after_the_file_is_disposed()
+    {
+        FitsFile file = FitsFile.Open(Reference.GoldenTable.PathOf("fits", "wave_log.fits"));
+        FitsImage image = file.Hdus[0].Image!;
+        file.Dispose();
+        Assert.Throws<ObjectDisposedException>(() => image.ReadDoubles());
+        Assert.True(file.Hdus[0].Header.TryGetDouble("CRVAL1", out _));
+    }
+
     private static MemoryStream Deflated(byte[] bytes)
     {
         MemoryStream stream = new();

@@ -41,7 +41,9 @@ internal sealed class CardWriter
         int room = CardText.CardBytes - head.Length - 2;
         if (quoted.Length <= room)
         {
-            AddWithComment($"{head}'{quoted.PadRight(Math.Min(LeastText, room))}'", comment);
+            // Comments start in one column; readers that write a card anew for its checksum do the same.
+            string text = $"'{quoted.PadRight(Math.Min(LeastText, room))}'";
+            AddWithComment(head + text.PadRight(Math.Min(ValueWidth, room)), comment);
             return;
         }
 
