@@ -64,6 +64,9 @@ def find_widths(folder, rows):
         seen.append((species, air))
         energy = float(record["excitation_potential_ev"]) * atomic.CM1_PER_EV
         near = [r for r in rows if r.species == species and abs(r.air - air) < 0.03 and abs(r.lower - energy) < 80.0 and not r.forbidden]
+        if not near and len(record["wavelength_air_angstrom"].split(".")[1]) < 3:
+            # Two decimals are not enough to measure a velocity by.
+            continue
         found.append((min(near, key=lambda r: abs(r.air - air)) if near else None, record))
     return found
 

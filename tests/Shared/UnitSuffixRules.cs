@@ -60,7 +60,6 @@ public sealed class UnitSuffixRules
         ["Strength"] = "any unit, the same for all lines of a figure",
         ["TextSizePoints"] = "typographic points, 1/72 inch",
         ["RValue"] = "a ratio (Tonry and Davis 1979)",
-        ["Correlation"] = "a coefficient, −1 to 1",
         ["Significance"] = "a ratio to its standard deviation",
         ["FalseAlarmProbability"] = "a probability",
         ["Variance"] = "the square of the unit of its value",

@@ -11,7 +11,7 @@ namespace StarLines.Tables.VoTables;
 
 /// <summary>Reads the first table of a VOTable 1.0 to 1.5: TABLEDATA, BINARY and BINARY2.</summary>
 /// <remarks>
-/// INFO and PARAM elements before and in the table become metadata. Where the table has one row whose arrays have one length, as spectra
+/// INFO and PARAM elements before the table and in it become metadata. Where the table has one row whose arrays have one length, as spectra
 /// are often stored, each element becomes a row; other arrays become text. Source: VOTable 1.4, IVOA Recommendation 2019.
 /// </remarks>
 internal sealed class VoTableReader
@@ -71,13 +71,27 @@ internal sealed class VoTableReader
                     _fields.Add(ReadField());
                     break;
                 case "DATA":
-                    return ReadData(name);
+                    Table table = ReadData(name);
+                    ReadTrailingInfo();
+                    return table;
             }
         }
 
         return _fields.Count > 0
             ? MakeTable(Columns(), 0, name)
             : throw Fault("no table with data", "a TABLE with FIELD and DATA elements", _status.Length > 0 ? $"the service said: {_status}" : "give a file with a table");
+    }
+
+    /// <summary>INFO elements may stand after the data too; the table shares the metadata they join.</summary>
+    private void ReadTrailingInfo()
+    {
+        while (_xml.Read() && !(_xml.NodeType == XmlNodeType.EndElement && _xml.LocalName == "TABLE"))
+        {
+            if (_xml.NodeType == XmlNodeType.Element && _xml.LocalName == "INFO")
+            {
+                TakeMetadata();
+            }
+        }
     }
 
     private void TakeMetadata()

@@ -27,14 +27,14 @@ internal static class VoTableWriter
         WriteAttribute(output, " name=\""u8, table.Name);
         output.Bytes(">\n"u8);
 
-        foreach (TableColumn column in table.Columns)
-        {
-            WriteField(output, column);
-        }
-
         foreach ((string key, MetadataValue value) in table.Metadata)
         {
             WriteInfo(output, key, value);
+        }
+
+        foreach (TableColumn column in table.Columns)
+        {
+            WriteField(output, column);
         }
 
         output.Bytes("<DATA>\n<TABLEDATA>\n"u8);
