@@ -1,5 +1,8 @@
 using System;
 using System.Collections.Generic;
+using System.Globalization;
+using StarLines.Plotting.Text;
+using StarLines.Velocities;
 
 namespace StarLines.Plotting;
 
@@ -37,6 +40,12 @@ public sealed class CorrelationCurve
     /// <summary>Full width at half maximum of the peak, km/s; NaN where unknown.</summary>
     public double PeakFwhmKmPerS { get; init; } = double.NaN;
 
+    /// <summary>The peak of a second star, km/s; none where there is one star.</summary>
+    public Measured SecondPeakKmPerS { get; init; } = Measured.None;
+
+    /// <summary>The curve that was fitted to the peak, a value for each velocity; or none.</summary>
+    public IReadOnlyList<double> FittedPeak { get; init; } = [];
+
     /// <summary>Lines of text beside the peak, such as the barycentric velocity.</summary>
     public IReadOnlyList<string> Notes { get; init; } = [];
 
@@ -45,4 +54,54 @@ public sealed class CorrelationCurve
 
     /// <summary>The correlation.</summary>
     public ReadOnlySpan<double> Correlation => _correlation;
+
+    /// <summary>The curve of a measured velocity, or null where nothing was correlated.</summary>
+    /// <param name="result">A velocity by one template.</param>
+    public static CorrelationCurve? FromResult(VelocityResult result)
+    {
+        ArgumentNullException.ThrowIfNull(result);
+        if (result.VelocitiesKmPerS.Length < 2)
+        {
+            return null;
+        }
+
+        bool found = result.PeakKmPerS.HasValue
+            && result.Measurement.Status is VelocityStatus.Measured or VelocityStatus.Topocentric;
+        return new CorrelationCurve(result.TemplateName, result.VelocitiesKmPerS, result.Correlation)
+        {
+            PeakKmPerS = found ? result.PeakKmPerS : Measured.None,
+            PeakFwhmKmPerS = result.Measurement.PeakFwhmKmPerS,
+            SecondPeakKmPerS = found && result.Second is { } second ? second.PeakKmPerS : Measured.None,
+            FittedPeak = found ? FitOf(result) : [],
+            Notes = found ? NotesOf(result) : [],
+        };
+    }
+
+    private static double[] FitOf(VelocityResult result)
+    {
+        var fit = new double[result.VelocitiesKmPerS.Length];
+        for (int i = 0; i < fit.Length; i++)
+        {
+            fit[i] = result.FittedPeak(result.VelocitiesKmPerS[i]);
+        }
+
+        return fit;
+    }
+
+    private static List<string> NotesOf(VelocityResult result)
+    {
+        var notes = new List<string>();
+        VelocityMeasurement measurement = result.Measurement;
+        if (measurement.Status == VelocityStatus.Measured)
+        {
+            notes.Add($"barycentric {LineText.WithUncertainty(measurement.VelocityKmPerS)} km s⁻¹");
+        }
+
+        if (double.IsFinite(result.Significance))
+        {
+            notes.Add(string.Create(CultureInfo.InvariantCulture, $"{result.Significance:F0}σ above noise"));
+        }
+
+        return notes;
+    }
 }

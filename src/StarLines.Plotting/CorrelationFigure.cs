@@ -2,6 +2,7 @@ using System;
 using System.Collections.Generic;
 using StarLines.Plotting.Drawing;
 using StarLines.Plotting.Text;
+using StarLines.Velocities;
 
 namespace StarLines.Plotting;
 
@@ -21,6 +22,27 @@ public static class CorrelationFigure
 
     /// <summary>Half of the range around the peak, at least, in points of the curve.</summary>
     private const int LeastZoomPoints = 8;
+
+    /// <summary>Makes the figure of the velocities measured in a spectrum; null where nothing was correlated.</summary>
+    /// <param name="spectrum">The spectrum.</param>
+    /// <param name="results">Its velocities, one a template; the first 12 are shown.</param>
+    public static Figure? FromResults(Spectrum spectrum, IReadOnlyList<VelocityResult> results)
+    {
+        ArgumentNullException.ThrowIfNull(spectrum);
+        ArgumentNullException.ThrowIfNull(results);
+        var curves = new List<CorrelationCurve>();
+        foreach (VelocityResult result in results)
+        {
+            if (curves.Count < MostCurves && CorrelationCurve.FromResult(result) is { } curve)
+            {
+                curves.Add(curve);
+            }
+        }
+
+        return curves.Count == 0
+            ? null
+            : Create(curves, TitleText.Of(spectrum.Metadata), UnitText.VelocityLabel(spectrum.Scale.Frame));
+    }
 
     /// <summary>Makes the figure.</summary>
     /// <param name="curves">The curves, from the top; 1 to 12.</param>
@@ -91,12 +113,22 @@ public static class CorrelationFigure
         var notes = new List<string>();
         if (curve.PeakKmPerS.HasValue)
         {
+            if (curve.FittedPeak.Count == x.Length)
+            {
+                items.Add(new Trace("fit", x, [.. curve.FittedPeak], Pens.Model with { Dash = Dash.Dashed }, style: TraceStyle.Smooth));
+            }
+
             items.Add(new Rule("peak ±1σ", vertical: true, curve.PeakKmPerS.Value, Pens.Peak, curve.PeakKmPerS.Uncertainty));
-            notes.Add($"v = {LineText.WithUncertainty(curve.PeakKmPerS)} km s⁻¹");
+            notes.Add($"peak {LineText.WithUncertainty(curve.PeakKmPerS)} km s⁻¹");
         }
         else
         {
             notes.Add("no peak");
+        }
+
+        if (curve.SecondPeakKmPerS.HasValue)
+        {
+            items.Add(new Rule("second star", vertical: true, curve.SecondPeakKmPerS.Value, Pens.SecondPeak, curve.SecondPeakKmPerS.Uncertainty));
         }
 
         notes.AddRange(curve.Notes);
@@ -129,7 +161,13 @@ public static class CorrelationFigure
         double half = Math.Max(LeastZoomPoints * step, double.IsFinite(curve.PeakFwhmKmPerS) ? ZoomWidths * curve.PeakFwhmKmPerS : 0.0);
         half = Math.Min(half, 0.5 * (x[^1] - x[0]));
         double centre = Math.Clamp(curve.PeakKmPerS.Value, x[0] + half, x[^1] - half);
-        return new DataRange(centre - half, centre + half);
+        var zoom = new DataRange(centre - half, centre + half);
+        if (curve.SecondPeakKmPerS.HasValue)
+        {
+            zoom = zoom.Including(curve.SecondPeakKmPerS.Value - (0.5 * half)).Including(curve.SecondPeakKmPerS.Value + (0.5 * half));
+        }
+
+        return new DataRange(Math.Max(x[0], zoom.Minimum), Math.Min(x[^1], zoom.Maximum));
     }
 
     private static DataRange Extent(ReadOnlySpan<double> values)

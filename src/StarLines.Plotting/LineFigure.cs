@@ -1,6 +1,9 @@
 using System;
 using System.Collections.Generic;
+using StarLines.Continuum;
+using StarLines.Lines;
 using StarLines.Plotting.Drawing;
+using StarLines.Plotting.Text;
 
 namespace StarLines.Plotting;
 
@@ -16,6 +19,9 @@ public static class LineFigure
     private const int MostPanelsPerPage = 60;
     private const double LeastResidualRange = 4.2;
     private const double LargestResidualRange = 8.4;
+
+    /// <summary>Up to this range the numbers beside the residuals stand at 3, beyond at 5.</summary>
+    private const double LargestFineRange = 5.0;
 
     /// <summary>Makes one figure of up to 60 panels.</summary>
     /// <param name="panels">The panels, in order; at least one.</param>
@@ -82,6 +88,25 @@ public static class LineFigure
         return figures;
     }
 
+    /// <summary>Makes the pages of the lines measured in a spectrum.</summary>
+    /// <param name="spectrum">The spectrum.</param>
+    /// <param name="continuum">Its continuum, of the same number of pixels.</param>
+    /// <param name="measured">What was measured in it.</param>
+    /// <param name="strongest">The largest number of lines, the most significant; null for all that were measured.</param>
+    /// <param name="panelsPerPage">1 to 60.</param>
+    /// <returns>The pages; none where no line was measured.</returns>
+    /// <exception cref="ArgumentException">The lengths differ.</exception>
+    public static IReadOnlyList<Figure> FromMeasurements(
+        Spectrum spectrum,
+        ContinuumFit continuum,
+        LineMeasurementSet measured,
+        int? strongest = null,
+        int panelsPerPage = DefaultPanelsPerPage) => Pages(
+            LinePanel.FromMeasurements(spectrum, continuum, measured, strongest),
+            TitleText.Of(spectrum.Metadata),
+            UnitText.WavelengthLabel(spectrum.Scale),
+            panelsPerPage);
+
     private static int Columns(int panels) => panels switch
     {
         1 => 1,
@@ -116,7 +141,7 @@ public static class LineFigure
 
         items.Add(new Rule(
             "continuum", vertical: false, line.LocalContinuum, Pens.DoubtfulContinuum with { Width = 1f }, line.ContinuumSigma));
-        items.Add(new ErrorPoints("data", x, line.Flux.ToArray(), line.Sigma.ToArray(), line.Used.ToArray()));
+        items.Add(new ErrorPoints("data", x, line.Flux.ToArray(), line.Sigma.ToArray(), line.Used.ToArray(), joined: true));
         DataRange y = PlotRange.Robust(line.Flux, line.Sigma, line.Used).Including(line.LocalContinuum);
         if (line.Model.Length != 0)
         {
@@ -153,8 +178,8 @@ public static class LineFigure
         {
             X = range,
             Y = new DataRange(-largest, largest),
-            YStep = 3.0,
-            YStepDivisions = 3,
+            YStep = largest > LargestFineRange ? 5.0 : 3.0,
+            YStepDivisions = largest > LargestFineRange ? 5 : 3,
             XLabel = wavelengthLabel,
             YLabel = first ? "(O − C)/σ" : "",
             Items =

@@ -53,7 +53,6 @@ public sealed class UnitSuffixRules
         ["BarycentricRedshift"] = "a ratio",
         ["Airmass"] = "in units of the zenith",
         ["EpochJulianYear"] = "the unit is the name",
-        ["Correlation"] = "−1 to 1",
         ["Model"] = "in units of the continuum",
         ["LocalContinuum"] = "in units of the continuum",
         ["ContinuumSigma"] = "in units of the continuum",

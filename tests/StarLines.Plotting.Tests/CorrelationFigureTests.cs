@@ -1,6 +1,8 @@
 using System;
 using System.Linq;
 using StarLines.Plotting.Drawing;
+using StarLines.Templates;
+using StarLines.Velocities;
 using Xunit;
 
 namespace StarLines.Plotting.Tests;
@@ -20,7 +22,7 @@ public sealed class CorrelationFigureTests
         Assert.Equal(["metal"], whole.Items.OfType<Note>().Single().Lines);
         Rule rule = peak.Items.OfType<Rule>().Single(item => item.Vertical);
         Assert.Equal((-42.5, 0.12), (rule.Value, rule.Sigma));
-        Assert.Equal("v = −42.50 ± 0.12 km s⁻¹", peak.Items.OfType<Note>().Single().Lines[0]);
+        Assert.Equal("peak −42.50 ± 0.12 km s⁻¹", peak.Items.OfType<Note>().Single().Lines[0]);
     }
 
     [Fact]
@@ -37,6 +39,28 @@ public sealed class CorrelationFigureTests
     {
         Panel peak = CorrelationFigure.Create([Curve(490, 1)]).Content.Cells[1].Panels[0];
         Assert.True(peak.X.Maximum <= 500 && peak.X.Contains(490));
+    }
+
+    [Fact]
+    public void A_measured_velocity_becomes_a_curve_with_its_peak()
+    {
+        Spectrum spectrum = Samples.Spectrum();
+        TemplateLine[] lines = [.. Enumerable.Range(0, 20).Select(i => new TemplateLine
+        {
+            Name = $"Xy I {i}",
+            WavelengthAngstrom = 5012.5 + (25 * i),
+            Depth = 0.5,
+            FwhmAngstrom = 2.35,
+        })];
+        LineTemplate template = LineTemplate.FromLines("comb", Medium.Air, lines, widthsKnown: true);
+        VelocityResult result = VelocityMeasurer.Measure(spectrum, Samples.Continuum(spectrum.Count), template);
+        Figure figure = CorrelationFigure.FromResults(spectrum, [result])!;
+        Panel peak = figure.Content.Cells[1].Panels[0];
+        Assert.Equal("Velocity, barycentric (km s⁻¹)", peak.XLabel);
+        Assert.Equal(result.PeakKmPerS.Value, peak.Items.OfType<Rule>().First(rule => rule.Vertical).Value);
+        Assert.Equal(result.Correlation.ToArray(), figure.Content.Cells[0].Panels[0].Items.OfType<Trace>().Single().Y);
+        Assert.Equal("Lyra 2207 B  ·  Comb", figure.Title);
+        Assert.Null(CorrelationFigure.FromResults(spectrum, []));
     }
 
     [Fact]

@@ -12,6 +12,9 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
     private const float Margin = 8f;
     private const float NumberGap = 3f;
 
+    /// <summary>Room for half of the last number of a horizontal axis, text heights.</summary>
+    private const float RightRoom = 1.3f;
+
     /// <summary>The share of an axis that its label may take; a longer one becomes smaller.</summary>
     private const float LabelShare = 0.97f;
 
@@ -23,7 +26,7 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
         }
 
         List<LegendEntry> legend = LegendEntry.Of(content.Cells.SelectMany(cell => cell.Panels).SelectMany(panel => panel.Items));
-        var area = new SKRect(Margin, Margin, width - Margin - (0.4f * textSize), height - (0.5f * Margin));
+        var area = new SKRect(Margin, Margin, width - Margin - (RightRoom * textSize), height - (0.5f * Margin));
         if (title.Length != 0 || legend.Count != 0)
         {
             var heading = new Heading(canvas, palette, textSize);
@@ -46,7 +49,7 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
         plot.HideGrid();
         plot.Axes.SetLimits(placed.Panel.X.Minimum, placed.Panel.X.Maximum, placed.YAxis.Minimum, placed.YAxis.Maximum);
         StyleAxis(plot.Axes.Bottom, placed.XTicks, placed.Panel.XLabel, frame.Width);
-        StyleAxis(plot.Axes.Left, placed.YTicks, placed.Panel.YLabel, frame.Height);
+        StyleAxis(plot.Axes.Left, placed.YTicks, "", frame.Height);
         plot.Axes.Bottom.TickLabelStyle.OffsetY = NumberGap;
         plot.Axes.Left.TickLabelStyle.OffsetX = -NumberGap;
         plot.Axes.Left.TickLabelStyle.OffsetY = 0.1f * textSize;
@@ -59,6 +62,22 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
 
         plot.Layout.Fixed(new PixelRect(frame.Left, frame.Right, frame.Bottom, frame.Top));
         plot.Render(canvas, new PixelRect(0, frame.Right + 4, frame.Bottom + (4 * textSize), 0));
+        DrawYLabel(placed);
+    }
+
+    /// <summary>Draws the label of the vertical axis in line with those above and below.</summary>
+    private void DrawYLabel(PlacedPanel placed)
+    {
+        using SKFont font = FigureText.Font(Fitting(placed.Panel.YLabel, placed.Frame.Height));
+        FigureText.DrawUpwards(
+            canvas, placed.Panel.YLabel, placed.YLabelX, placed.Frame.MidY, SKTextAlign.Center, font, palette[Ink.Axis]);
+    }
+
+    /// <summary>The size of text at which a label fits its axis.</summary>
+    private float Fitting(string label, float length)
+    {
+        using SKFont font = FigureText.Font(textSize);
+        return textSize * Math.Min(1f, LabelShare * length / Math.Max(1f, font.MeasureText(label)));
     }
 
     private void StyleAxis(IAxis axis, Ticks ticks, string label, float length)
@@ -76,8 +95,7 @@ internal sealed class FigurePainter(SKCanvas canvas, Palette palette, float text
             style.SubpixelText = true;
         }
 
-        using SKFont font = FigureText.Font(textSize);
-        axis.Label.FontSize = textSize * Math.Min(1f, LabelShare * length / Math.Max(1f, font.MeasureText(label)));
+        axis.Label.FontSize = Fitting(label, length);
         axis.Label.Text = label;
         axis.Label.IsVisible = label.Length != 0;
     }

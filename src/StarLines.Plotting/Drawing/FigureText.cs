@@ -8,9 +8,8 @@ internal static class FigureText
     internal static SKFont Font(float size) => new(FigureFonts.Typeface, size)
     {
         Edging = SKFontEdging.Antialias,
-        Hinting = SKFontHinting.None,
+        Hinting = SKFontHinting.Normal,
         Subpixel = true,
-        LinearMetrics = true,
     };
 
     /// <summary>Draws text whose baseline starts, has its middle or ends at a point.</summary>

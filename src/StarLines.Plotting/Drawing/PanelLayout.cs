@@ -5,7 +5,7 @@ using SkiaSharp;
 namespace StarLines.Plotting.Drawing;
 
 /// <summary>A panel with its place on the canvas, the range its vertical axis shows and its ticks.</summary>
-internal sealed record PlacedPanel(Panel Panel, SKRect Frame, DataRange YAxis, float Band, Ticks XTicks, Ticks YTicks);
+internal sealed record PlacedPanel(Panel Panel, SKRect Frame, DataRange YAxis, float Band, float YLabelX, Ticks XTicks, Ticks YTicks);
 
 /// <summary>Finds the places of the panels of a figure, so that frames in a row and in a column are in line.</summary>
 internal sealed class PanelLayout(FigureContent content, SKRect area, float textSize)
@@ -49,7 +49,7 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
             {
                 SKRect cell = Column(column);
                 var frame = new SKRect(cell.Left + _leftPads[column], top, cell.Right, top + frameHeight);
-                PlaceCell(content.Cells[(row * content.Columns) + column], frame, placed);
+                PlaceCell(content.Cells[(row * content.Columns) + column], frame, cell.Left + (0.5f * _labelHeight), placed);
             }
 
             top += frameHeight + bottoms[row] + Gap;
@@ -89,7 +89,7 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
 
     private float Weight(int column) => content.ColumnWeights.Count == 0 ? 1f : content.ColumnWeights[column];
 
-    private void PlaceCell(Cell cell, SKRect area, List<PlacedPanel> placed)
+    private void PlaceCell(Cell cell, SKRect area, float yLabelX, List<PlacedPanel> placed)
     {
         float weights = 0f;
         foreach (Panel panel in cell.Panels)
@@ -103,12 +103,12 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
         {
             Panel panel = cell.Panels[i];
             float own = height * panel.Weight / weights;
-            placed.Add(PlaceFrame(panel, new SKRect(area.Left, top, area.Right, top + own), i == cell.Panels.Count - 1));
+            placed.Add(PlaceFrame(panel, new SKRect(area.Left, top, area.Right, top + own), yLabelX, i == cell.Panels.Count - 1));
             top += own + StackGap;
         }
     }
 
-    private PlacedPanel PlaceFrame(Panel panel, SKRect frame, bool numbersBelow)
+    private PlacedPanel PlaceFrame(Panel panel, SKRect frame, float yLabelX, bool numbersBelow)
     {
         float band = 0f;
         foreach (PanelItem item in panel.Items)
@@ -128,7 +128,7 @@ internal sealed class PanelLayout(FigureContent content, SKRect area, float text
             yTicks = yTicks.WithoutNumbersBelow(y.Minimum + (y.Length * HalfNumber * textSize / frame.Height));
         }
 
-        return new PlacedPanel(panel, frame, y, band, Ticks.Across(panel.X, frame.Width, textSize, numbersBelow), yTicks);
+        return new PlacedPanel(panel, frame, y, band, yLabelX, Ticks.Across(panel.X, frame.Width, textSize, numbersBelow), yTicks);
     }
 
     /// <summary>Sets the room to the left of each column to what its numbers and label need.</summary>

@@ -19,5 +19,7 @@ internal static class Pens
 
     internal static Pen Centre { get; } = new(Ink.Guide, 0.8f, Dash.Dotted);
 
+    internal static Pen SecondPeak { get; } = new(Ink.Second, 1.3f);
+
     internal static Pen Peak { get; } = new(Ink.Continuum, 1.3f);
 }

@@ -121,7 +121,7 @@ internal sealed class Trace : PanelItem
         }
     }
 
-    /// <summary>The cubic through each pair of neighbours whose slopes are those between the points around them (Catmull and Rom 1974).</summary>
+    /// <summary>The monotone cubic through the points (Fritsch and Butland 1984, SIAM J. Sci. Stat. Comput. 5, 300).</summary>
     private void AddSmooth(ChunkedPath path, PanelCanvas panel, int first, int end)
     {
         bool open = false;
@@ -153,11 +153,17 @@ internal sealed class Trace : PanelItem
         }
     }
 
+    /// <summary>0 at an extreme, so that the curve does not leave the range of the points, else the harmonic mean of both sides.</summary>
     private double Slope(int i)
     {
-        int before = i > 0 && IsShown(i - 1) ? i - 1 : i;
-        int after = i + 1 < X.Length && IsShown(i + 1) ? i + 1 : i;
-        return after > before ? (Y[after] - Y[before]) / (X[after] - X[before]) : 0.0;
+        if (i == 0 || i == X.Length - 1 || !IsShown(i - 1) || !IsShown(i + 1))
+        {
+            return 0.0;
+        }
+
+        double before = (Y[i] - Y[i - 1]) / (X[i] - X[i - 1]);
+        double after = (Y[i + 1] - Y[i]) / (X[i + 1] - X[i]);
+        return before * after <= 0.0 ? 0.0 : 2.0 * before * after / (before + after);
     }
 
     private void AddLine(ChunkedPath path, PanelCanvas panel, int first, int end)

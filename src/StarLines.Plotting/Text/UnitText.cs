@@ -102,6 +102,12 @@ internal static partial class UnitText
         (string unit, int exponent) = Pretty(fluxUnit);
         exponent += axisExponent;
         string power = exponent == 0 ? "" : "10" + Superscript(exponent);
+        if (unit.Contains("flux", StringComparison.OrdinalIgnoreCase))
+        {
+            string words = char.ToUpperInvariant(unit[0]) + unit[1..].ToLowerInvariant();
+            return power.Length == 0 ? words : $"{words} ({power})";
+        }
+
         return unit.Length == 0
             ? (exponent == 0 ? "Flux (arbitrary unit)" : $"Flux ({power} arbitrary units)")
             : $"Flux ({(power.Length == 0 ? "" : power + " ")}{unit})";
@@ -116,17 +122,27 @@ internal static partial class UnitText
             Medium.Vacuum => " in vacuum",
             _ => "",
         };
-        string frame = scale.Frame switch
-        {
-            VelocityFrame.Topocentric => ", topocentric",
-            VelocityFrame.Geocentric => ", geocentric",
-            VelocityFrame.Heliocentric => ", heliocentric",
-            VelocityFrame.Barycentric => ", barycentric",
-            _ => "",
-        };
+        string word = FrameWord(scale.Frame);
+        string frame = word.Length == 0 ? "" : ", " + word;
         string noun = scale.Frame == VelocityFrame.Rest ? "Rest wavelength" : "Wavelength";
         return $"{noun}{medium}{frame} (Å)";
     }
+
+    /// <summary>The label of a velocity axis in the frame of a spectrum.</summary>
+    internal static string VelocityLabel(VelocityFrame frame)
+    {
+        string word = FrameWord(frame);
+        return word.Length == 0 ? "Velocity (km s⁻¹)" : $"Velocity, {word} (km s⁻¹)";
+    }
+
+    private static string FrameWord(VelocityFrame frame) => frame switch
+    {
+        VelocityFrame.Topocentric => "topocentric",
+        VelocityFrame.Geocentric => "geocentric",
+        VelocityFrame.Heliocentric => "heliocentric",
+        VelocityFrame.Barycentric => "barycentric",
+        _ => "",
+    };
 
     [GeneratedRegex(@"^(?:10(?:\*\*|\^)?\(?|1[eE])(?<power>[+-]?\d{1,3})\)?[\s*.]*")]
     private static partial Regex FactorPattern();

@@ -22,6 +22,7 @@ public sealed class TextTests
     [Theory]
     [InlineData("", 0, "Flux (arbitrary unit)")]
     [InlineData("adu", 4, "Flux (10⁴ ADU)")]
+    [InlineData("Relative Flux", 0, "Relative flux")]
     [InlineData("10**(-17)erg/cm2/s/Ang", 2, "Flux (10⁻¹⁵ erg cm⁻² s⁻¹ Å⁻¹)")]
     public void The_flux_axis_tells_unit_and_power(string unit, int exponent, string expected) =>
         Assert.Equal(expected, UnitText.FluxLabel(unit, exponent));
