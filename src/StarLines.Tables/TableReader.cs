@@ -56,7 +56,8 @@ public static class TableReader
             return TableFormat.VoTable;
         }
 
-        return text.StartsWith("{"u8) || text.StartsWith("[{"u8) ? TableFormat.Json : TableFormat.Csv;
+        bool isArray = text.StartsWith("["u8) && text[1..].TrimStart(" \t\r\n"u8).StartsWith("{"u8);
+        return isArray || text.StartsWith("{"u8) ? TableFormat.Json : TableFormat.Csv;
     }
 
     private static byte[] ReadAll(Stream stream, string name)

@@ -1,3 +1,4 @@
+using System;
 using System.Globalization;
 
 namespace StarLines.Tables.Delimited;
@@ -13,6 +14,12 @@ internal static class CsvReader
 {
     internal static Table Read(byte[] bytes, string source)
     {
+        if (bytes.AsSpan().StartsWith("SIMPLE  ="u8) || bytes.AsSpan().Contains((byte)0))
+        {
+            string found = bytes[0] == (byte)'S' ? "a FITS file" : "binary data";
+            throw new TableFormatException(source, 1, found, "a table of text", "give a CSV, ECSV, VOTable, JSON or Parquet file");
+        }
+
         byte separator = Separators.Detect(bytes, 0, 1, source);
         DelimitedText text = DelimitedParser.Parse(bytes, 0, 1, separator, source);
         if (text.Count == 0)

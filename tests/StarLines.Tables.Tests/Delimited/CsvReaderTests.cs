@@ -78,6 +78,8 @@ public class CsvReaderTests
     [InlineData("a,b\n1\n", 2, "1 cells")]
     [InlineData("a,b\n1,2\n\"x,4\n", 3, "a quoted cell without end")]
     [InlineData("a,b\n\"x\"y,4\n", 2, "text after a closing quote")]
+    [InlineData("SIMPLE  =                    T / conforms to FITS standard", 1, "a FITS file")]
+    [InlineData("a\0b", 1, "binary data")]
     [InlineData("", 0, "no row")]
     [InlineData("# only a comment\n", 0, "no row")]
     public void Bad_content_is_named_with_its_line_and_a_cure(string text, int line, string found)
