@@ -141,7 +141,7 @@ internal static class HeaderSite
 
     private static double Apart(double a, double b) => Math.Abs(Math.IEEERemainder(a - b, 360.0));
 
-    private static ObservingSite? Lookup(string name) => null;
+    private static ObservingSite? Lookup(string name) => ObservingSites.TryFind(name, out ObservingSite? site) ? site : null;
 
     private static bool SaysWest(string comment) =>
         comment.Contains("west", StringComparison.OrdinalIgnoreCase)
