@@ -33,6 +33,9 @@ public sealed class WavelengthScale
     /// <summary>The velocity frame.</summary>
     public VelocityFrame Frame { get; }
 
+    /// <summary>The step a pixel: Å of a linear scale, ln λ of a logarithmic one, NaN of a table.</summary>
+    internal double Step => _step;
+
     /// <summary>Number of pixels.</summary>
     public int Count => _wavelengths.Length;
 

@@ -1,11 +1,15 @@
 using System;
 using System.Globalization;
+using StarLines.Velocities.Time;
 
 namespace StarLines.IO;
 
 /// <summary>Dates and times of day as headers write them.</summary>
 internal static class CalendarDate
 {
+    /// <summary>The first spectra of stars on plates, and a year that no header means.</summary>
+    private const int FirstYear = 1860, LastYear = 2200;
+
     /// <summary>Julian Date of MJD 0.</summary>
     internal const double MjdZero = 2_400_000.5;
 
@@ -61,19 +65,14 @@ internal static class CalendarDate
             year += 1900;
         }
 
-        if (year is < 1800 or > 2200 || month is < 1 or > 12 || day < 1 || day > DateTime.DaysInMonth(year, month))
+        if (year is < FirstYear or > LastYear || month is < 1 or > 12 || day < 1 || day > DateTime.DaysInMonth(year, month))
         {
             return false;
         }
 
-        midnight = new DateTime(year, month, day, 0, 0, 0, DateTimeKind.Utc).Subtract(Reference).TotalDays + ReferenceJd;
+        midnight = UtcTime.MidnightJd(year, month, day);
         return true;
     }
-
-    private static readonly DateTime Reference = new(2000, 1, 1, 0, 0, 0, DateTimeKind.Utc);
-
-    /// <summary>Julian Date of 2000-01-01T00:00.</summary>
-    private const double ReferenceJd = 2_451_544.5;
 
     private static bool Number(string text, out int value) =>
         int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out value);

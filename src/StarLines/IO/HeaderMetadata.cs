@@ -45,7 +45,7 @@ internal static class HeaderMetadata
         return new SpectrumMetadata
         {
             Source = source,
-            Target = options.Target.Length != 0 ? options.Target : header.FirstText(Targets),
+            Target = options.Target.Length != 0 ? options.Target : Target(header),
             RightAscensionDegrees = options.RightAscensionDegrees ?? position?.RaDegrees,
             DeclinationDegrees = options.DeclinationDegrees ?? position?.DecDegrees,
             Site = options.Site ?? HeaderSite.Read(header, context),
@@ -58,6 +58,14 @@ internal static class HeaderMetadata
             AppliedCorrectionKmPerS = applied,
             Remarks = [.. context.Remarks],
         };
+    }
+
+    /// <summary>The target; some pipelines write the kind of product into OBJECT and keep the target elsewhere.</summary>
+    private static string Target(HeaderKeywords header)
+    {
+        string target = header.FirstText(Targets);
+        string observed = header.Text("ESO OBS TARG NAME");
+        return observed.Length != 0 && target == header.Text("ESO PRO CATG") ? observed : target;
     }
 
     private static double? ResolvingPower(HeaderKeywords header, double firstAngstrom, double lastAngstrom)

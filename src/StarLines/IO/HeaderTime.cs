@@ -271,7 +271,7 @@ internal static class HeaderTime
         foreach (string key in keys)
         {
             // A whole number is a night, not a time.
-            if (header.TryNumber(key, out double value) && value != Math.Floor(value) && (zero == 0.0 ? value is > 2.3e6 and < 2.6e6 : value is > 15_000.0 and < 90_000.0))
+            if (header.TryNumber(key, out double value) && value != Math.Floor(value) && (zero == 0.0 ? value is > 2_415_000.0 and < 2_524_000.0 : value is > 15_000.0 and < 124_000.0))
             {
                 found = key;
                 double day = Math.Floor(value);
