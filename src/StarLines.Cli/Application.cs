@@ -1,6 +1,7 @@
 using System;
 using System.CommandLine;
 using System.IO;
+using StarLines.Cli.Output;
 
 namespace StarLines.Cli;
 
@@ -13,7 +14,7 @@ internal static class Application
     /// <returns>The exit code.</returns>
     public static int Run(string[] args, Terminal terminal)
     {
-        RootCommand root = CommandTree.Create(terminal);
+        RootCommand root = CommandTree.Create(terminal, new Provenance(args));
         ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
         try
         {

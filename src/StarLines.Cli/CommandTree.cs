@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.CommandLine.Help;
 using StarLines.Cli.Commands;
 using StarLines.Cli.Options;
+using StarLines.Cli.Output;
 
 namespace StarLines.Cli;
 
@@ -13,10 +14,12 @@ internal static class CommandTree
 
     /// <summary>Makes the tree.</summary>
     /// <param name="terminal">Where the commands write.</param>
-    public static RootCommand Create(Terminal terminal)
+    /// <param name="provenance">What their tables say about their making.</param>
+    public static RootCommand Create(Terminal terminal, Provenance provenance)
     {
         var root = new RootCommand(Description)
         {
+            BarycentreCommand.Create(terminal, provenance),
             CompletionCommand.Create(terminal),
         };
         new CommonOptions().AddTo(root);

@@ -13,6 +13,7 @@ internal sealed class Terminal : IDisposable
 
     private readonly CancellationTokenSource _stop = new();
     private readonly Lock _gate = new();
+    private IAnsiConsole? _live;
 
     /// <summary>Makes a terminal of streams.</summary>
     /// <param name="input">Standard input.</param>
@@ -73,12 +74,35 @@ internal sealed class Terminal : IDisposable
         return terminal;
     }
 
-    /// <summary>A console for progress, on standard error.</summary>
-    public IAnsiConsole ProgressConsole() => AnsiConsole.Create(new AnsiConsoleSettings
+    /// <summary>Does work of several steps and shows how far it is, on standard error, where a person reads it.</summary>
+    /// <param name="what">What is done, such as <c>measuring</c>.</param>
+    /// <param name="steps">Number of steps.</param>
+    /// <param name="work">The work; it calls its argument after each step, from any thread.</param>
+    public void WithProgress(string what, int steps, Action<Action> work)
     {
-        Out = new AnsiConsoleOutput(Error),
-        Interactive = ErrorIsTerminal ? InteractionSupport.Yes : InteractionSupport.No,
-    });
+        if (!ErrorIsTerminal || Quiet || steps < 2)
+        {
+            work(static () => { });
+            return;
+        }
+
+        IAnsiConsole console = AnsiConsole.Create(new AnsiConsoleSettings { Out = new AnsiConsoleOutput(Error) });
+        Progress progress = console.Progress().AutoClear(true).Columns(
+            new TaskDescriptionColumn(), new ProgressBarColumn(), new PercentageColumn(), new RemainingTimeColumn());
+        _live = console;
+        try
+        {
+            progress.Start(context =>
+            {
+                ProgressTask task = context.AddTask(what, autoStart: true, maxValue: steps);
+                work(() => task.Increment(1));
+            });
+        }
+        finally
+        {
+            _live = null;
+        }
+    }
 
     /// <summary>Says that something is wrong, in one sentence.</summary>
     public void SayError(string sentence) => Say("error: " + sentence);
@@ -113,6 +137,13 @@ internal sealed class Terminal : IDisposable
     {
         lock (_gate)
         {
+            // While a bar is shown, its console makes room for the line above it.
+            if (_live is { } console)
+            {
+                console.WriteLine(line);
+                return;
+            }
+
             Error.WriteLine(line);
             Error.Flush();
         }

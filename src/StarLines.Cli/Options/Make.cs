@@ -33,11 +33,13 @@ internal static class Make
     /// <param name="valueName">What stands for the value in the help.</param>
     /// <param name="description">One sentence.</param>
     /// <param name="read">Reads one value; throws <see cref="FormatException"/>.</param>
-    public static Option<List<T>> Many<T>(string name, string valueName, string description, Func<string, T> read) => new(name)
+    /// <param name="mayRepeat">False for an option that shares this form and is given once.</param>
+    public static Option<List<T>> Many<T>(
+        string name, string valueName, string description, Func<string, T> read, bool mayRepeat = true) => new(name)
     {
         HelpName = valueName,
-        Description = description + " May repeat.",
-        Arity = ArgumentArity.OneOrMore,
+        Description = mayRepeat ? description + " May repeat." : description,
+        Arity = mayRepeat ? ArgumentArity.OneOrMore : ArgumentArity.ExactlyOne,
         AllowMultipleArgumentsPerToken = false,
         DefaultValueFactory = static _ => [],
         CustomParser = result =>

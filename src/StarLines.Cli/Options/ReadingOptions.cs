@@ -1,0 +1,85 @@
+using System.Collections.Generic;
+using System.CommandLine;
+using StarLines.IO;
+using StarLines.Velocities;
+
+namespace StarLines.Cli.Options;
+
+/// <summary>The files of a command and what the user says about them; what is said here wins over what a file says.</summary>
+internal sealed class ReadingOptions
+{
+    private readonly Argument<string[]> _files = new("FILE")
+    {
+        Description = "FITS, CSV, ECSV or VOTable files, also .gz; FILE#HDU or FILE#HDU:ROW for a part; - for standard input.",
+        Arity = ArgumentArity.OneOrMore,
+    };
+
+    private readonly Option<List<WavelengthRange>> _ranges = Make.Many(
+        "--range", "A:B", "Use these wavelengths only, Å, in the file's own medium.", Values.Range);
+
+    private readonly Option<Medium> _medium = Make.One(
+        "--medium",
+        "MEDIUM",
+        "What the wavelengths of the file are, air or vacuum, where it does not say or says it wrongly.",
+        static text => Values.Word(text, ("air", Medium.Air), ("vacuum", Medium.Vacuum)),
+        "air", "vacuum");
+
+    private readonly Option<VelocityFrame> _frame = Make.One(
+        "--frame",
+        "FRAME",
+        "The velocity frame of the wavelengths: topocentric, geocentric, heliocentric, barycentric or rest.",
+        static text => Values.Word(
+            text,
+            ("topocentric", VelocityFrame.Topocentric),
+            ("barycentric", VelocityFrame.Barycentric),
+            ("heliocentric", VelocityFrame.Heliocentric),
+            ("geocentric", VelocityFrame.Geocentric),
+            ("rest", VelocityFrame.Rest)),
+        "topocentric", "barycentric", "heliocentric", "geocentric", "rest");
+
+    private readonly Option<string?> _axisUnit = Make.One<string?>(
+        "--axis-unit", "UNIT", "Unit of the spectral axis, such as Angstrom, nm, um, log10(Angstrom), Hz.", static text => text);
+
+    private readonly Option<ColumnSelection?> _columns = Make.One<ColumnSelection?>(
+        "--columns", "LIST", "Which columns hold what: wave=…,flux=…,error=…,mask=….", ColumnSelection.Parse);
+
+    private readonly Option<string?> _target = Make.One<string?>("--target", "NAME", "Name of the target.", static text => text);
+
+    private readonly Option<double?> _power = Make.One<double?>(
+        "--resolving-power", "R", "Resolving power λ/FWHM of the instrument.", static text => Values.Positive(text));
+
+    private readonly PlaceOptions _place = new();
+
+    /// <summary>Adds the argument and the options to a command.</summary>
+    public void AddTo(Command command)
+    {
+        command.Add(_files);
+        command.Add(_ranges);
+        command.Add(_medium);
+        command.Add(_frame);
+        command.Add(_axisUnit);
+        command.Add(_columns);
+        command.Add(_target);
+        _place.AddTo(command);
+        command.Add(_power);
+    }
+
+    /// <summary>The files as they were named.</summary>
+    public IReadOnlyList<string> Files(ParseResult parsed) => parsed.GetValue(_files) ?? [];
+
+    /// <summary>What the user says about them.</summary>
+    public SpectrumReadOptions From(ParseResult parsed) => new()
+    {
+        Ranges = parsed.GetValue(_ranges) ?? [],
+        Medium = parsed.GetValue(_medium),
+        Frame = parsed.GetValue(_frame),
+        AxisUnit = parsed.GetValue(_axisUnit) ?? "",
+        Columns = parsed.GetValue(_columns),
+        Target = parsed.GetValue(_target) ?? "",
+        RightAscensionDegrees = _place.RightAscensionDegrees(parsed),
+        DeclinationDegrees = _place.DeclinationDegrees(parsed),
+        Site = _place.Site(parsed),
+        MidExposureUtc = _place.Time(parsed),
+        ResolvingPower = parsed.GetValue(_power),
+    };
+}
