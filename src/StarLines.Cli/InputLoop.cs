@@ -11,6 +11,9 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
     /// <summary>The name that stands for standard input.</summary>
     public const string StandardInput = "-";
 
+    /// <summary>Whether what was guessed while reading is said on standard error.</summary>
+    public bool SaysRemarks { get; init; } = true;
+
     /// <summary>Does something with every spectrum of every input.</summary>
     /// <param name="what">What is done, such as <c>measuring</c>.</param>
     /// <param name="action">What to do; what it throws counts against its input.</param>
@@ -57,6 +60,11 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
 
     private void SayRemarks(Spectrum spectrum)
     {
+        if (!SaysRemarks)
+        {
+            return;
+        }
+
         foreach (Remark remark in spectrum.Metadata.Remarks)
         {
             terminal.SayRemark($"{spectrum.Metadata.Source}: {remark.Sentence}");

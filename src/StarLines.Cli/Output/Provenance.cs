@@ -41,18 +41,24 @@ internal sealed class Provenance
     public static string Version { get; } =
         typeof(Provenance).Assembly.GetCustomAttribute<AssemblyInformationalVersionAttribute>()!.InformationalVersion;
 
-    /// <summary>Adds a file that was read; anything that is no file, such as standard input, is named alone.</summary>
-    public void AddInput(string name, string path)
+    /// <summary>Adds a file that was read, once; anything that is no file, such as standard input, is named alone.</summary>
+    /// <param name="source">The file, or a part of it as <c>FILE#HDU:ROW</c>.</param>
+    public void AddInput(string source)
     {
+        string path = File.Exists(source) ? source : source.Split('#')[0];
+        if (_inputs.Exists(input => input.Name == path))
+        {
+            return;
+        }
+
+        string sha256 = "";
         if (File.Exists(path))
         {
             using FileStream stream = File.OpenRead(path);
-            _inputs.Add((name, Convert.ToHexStringLower(SHA256.HashData(stream))));
+            sha256 = Convert.ToHexStringLower(SHA256.HashData(stream));
         }
-        else
-        {
-            _inputs.Add((name, ""));
-        }
+
+        _inputs.Add((path, sha256));
     }
 
     /// <summary>Adds a line list that was used.</summary>

@@ -1,0 +1,102 @@
+using System;
+using System.Globalization;
+using System.Text;
+using StarLines.Analysis;
+using StarLines.Velocities.Time;
+
+namespace StarLines.Cli.Output;
+
+/// <summary>One spectrum in a few lines for people.</summary>
+internal static class SpectrumSheet
+{
+    private const int LabelWidth = 14;
+
+    /// <summary>Uncertainties this many times larger or smaller than the scatter of the flux are pointed at.</summary>
+    private const double SuspiciousRatio = 2.0;
+
+    /// <summary>Writes the sheet, ending in a line feed.</summary>
+    public static string Write(SpectrumSummary summary)
+    {
+        var sheet = new StringBuilder();
+        SpectrumMetadata about = summary.Metadata;
+        sheet.Append(summary.Source).Append('\n');
+        Add(sheet, "target", about.Target.Length == 0 ? "not given" : about.Target);
+        Add(sheet, "position", Position(about));
+        Add(sheet, "site", Site(about.Site));
+        Add(sheet, "mid-exposure", Time(about));
+        Add(sheet, "instrument", string.Join(", ", Array.FindAll([about.Telescope, about.Instrument], static s => s.Length > 0)));
+        Add(sheet, "wavelengths", Wavelengths(summary));
+        Add(sheet, "medium", summary.Medium == Medium.Unknown ? "not given: air or vacuum? say --medium" : SpectrumSummaryTable.Word(summary.Medium));
+        Add(sheet, "frame", summary.Frame == VelocityFrame.Unknown ? "not given: say --frame" : SpectrumSummaryTable.Word(summary.Frame));
+        Add(sheet, "resolution", about.ResolvingPower is { } power ? Text($"R = {power:0}") : "not given");
+        Add(sheet, "flux", (summary.FluxUnit.Length == 0 ? "no unit" : summary.FluxUnit) + (summary.HasSigma ? ", with uncertainties" : ", without uncertainties"));
+        Add(sheet, "S/N", SignalToNoise(summary));
+        Add(sheet, "pixels", Pixels(summary));
+        Add(sheet, "correction", Correction(summary));
+        foreach (Remark remark in about.Remarks)
+        {
+            Add(sheet, "note", remark.Sentence);
+        }
+
+        return sheet.ToString();
+    }
+
+    private static void Add(StringBuilder sheet, string label, string text)
+    {
+        if (text.Length > 0)
+        {
+            sheet.Append("  ").Append(label.PadRight(LabelWidth)).Append(text).Append('\n');
+        }
+    }
+
+    private static string Position(SpectrumMetadata about) =>
+        about is { RightAscensionDegrees: { } ra, DeclinationDegrees: { } dec }
+            ? Text($"RA {ra:0.00000}°, Dec {dec:+0.00000;-0.00000}° (ICRS)")
+            : "not given";
+
+    private static string Site(ObservingSite? site) => site is null
+        ? "not given"
+        : Text($"{(site.Name.Length == 0 ? "" : site.Name + ": ")}latitude {site.LatitudeDegrees:0.0000}°, longitude {site.LongitudeDegrees:0.0000}° east, {site.HeightMetres:0} m");
+
+    private static string Time(SpectrumMetadata about) => about.MidExposureUtc is { } utc
+        ? UtcTime.ToIso(utc, 1) + " UTC" + (about.ExposureSeconds is { } seconds ? Text($", exposed {seconds:0.###} s") : "")
+        : "not given";
+
+    private static string Wavelengths(SpectrumSummary summary) => Text(
+        $"{summary.Range.MinimumAngstrom:0.00} to {summary.Range.MaximumAngstrom:0.00} Å, {summary.Pixels} pixels, {SpectrumSummaryTable.Word(summary.Sampling)}, step {summary.StepAngstrom:0.####} Å");
+
+    private static string SignalToNoise(SpectrumSummary summary)
+    {
+        double given = summary.SignalToNoise;
+        double found = summary.SignalToNoiseFromFlux;
+        if (double.IsNaN(given))
+        {
+            return double.IsNaN(found) ? "not known" : Text($"{found:0.#} a pixel, from the scatter of the flux");
+        }
+
+        string text = Text($"{given:0.#} a pixel by the uncertainties, {found:0.#} by the scatter of the flux");
+        bool isSuspicious = found > given * SuspiciousRatio || given > found * SuspiciousRatio;
+        return isSuspicious ? text + "; they disagree, so check the uncertainties" : text;
+    }
+
+    private static string Pixels(SpectrumSummary summary)
+    {
+        int bad = summary.Pixels - summary.GoodPixels;
+        return bad == 0 ? "all good" : Text($"{bad} of {summary.Pixels} bad ({100.0 * bad / summary.Pixels:0.##} %)");
+    }
+
+    private static string Correction(SpectrumSummary summary)
+    {
+        if (summary.Barycentre is not { } result)
+        {
+            return "none: position, site or time is missing; say --ra --dec --site --time";
+        }
+
+        string text = Text($"{result.CorrectionKmPerS:+0.0000;-0.0000} km/s to the barycentre, BJD {result.BarycentricJdTdb.Value:0.00000} TDB");
+        return summary.Frame is VelocityFrame.Barycentric or VelocityFrame.Heliocentric
+            ? text + "; the file says it is applied already"
+            : text;
+    }
+
+    private static string Text(FormattableString text) => text.ToString(CultureInfo.InvariantCulture);
+}
