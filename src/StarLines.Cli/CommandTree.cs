@@ -19,6 +19,7 @@ internal static class CommandTree
     {
         var root = new RootCommand(Description)
         {
+            InspectCommand.Create(terminal, provenance),
             BarycentreCommand.Create(terminal, provenance),
             CompletionCommand.Create(terminal),
         };
