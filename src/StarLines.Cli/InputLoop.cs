@@ -11,6 +11,9 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
     /// <summary>The name that stands for standard input.</summary>
     public const string StandardInput = "-";
 
+    /// <summary>What standard input is called in tables and sentences.</summary>
+    public const string StandardInputName = "standard-input";
+
     /// <summary>Whether what was guessed while reading is said on standard error.</summary>
     public bool SaysRemarks { get; init; } = true;
 
@@ -18,7 +21,24 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
     /// <param name="what">What is done, such as <c>measuring</c>.</param>
     /// <param name="action">What to do; what it throws counts against its input.</param>
     /// <returns>The exit code.</returns>
-    public int ForEach(string what, Action<Spectrum> action)
+    public int ForEachSpectrum(string what, Action<Spectrum> action) => ForEachInput(what, name =>
+    {
+        IReadOnlyList<Spectrum> spectra = name == StandardInput
+            ? SpectrumReader.Read(terminal.In, StandardInputName, options)
+            : SpectrumReader.Read(name, options);
+        foreach (Spectrum spectrum in spectra)
+        {
+            terminal.Stop.ThrowIfCancellationRequested();
+            SayRemarks(spectrum);
+            action(spectrum);
+        }
+    });
+
+    /// <summary>Does something with every input.</summary>
+    /// <param name="what">What is done, such as <c>inspecting</c>.</param>
+    /// <param name="action">What to do; what it throws counts against its input.</param>
+    /// <returns>The exit code.</returns>
+    public int ForEachInput(string what, Action<string> action)
     {
         IReadOnlyList<string> inputs = InputNames.Expand(names);
         int failed = 0;
@@ -31,20 +51,15 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
                 step();
             }
         });
+
         return failed == 0 ? ExitCode.Done : failed == inputs.Count ? ExitCode.NoInput : ExitCode.SomeFailed;
     }
 
-    private bool Try(string name, Action<Spectrum> action)
+    private bool Try(string name, Action<string> action)
     {
         try
         {
-            foreach (Spectrum spectrum in Read(name))
-            {
-                terminal.Stop.ThrowIfCancellationRequested();
-                SayRemarks(spectrum);
-                action(spectrum);
-            }
-
+            action(name);
             return true;
         }
         catch (Exception problem) when (problem is not (OperationCanceledException or UsageException))
@@ -53,10 +68,6 @@ internal sealed class InputLoop(Terminal terminal, IReadOnlyList<string> names, 
             return false;
         }
     }
-
-    private IReadOnlyList<Spectrum> Read(string name) => name == StandardInput
-        ? SpectrumReader.Read(terminal.In, "standard-input", options)
-        : SpectrumReader.Read(name, options);
 
     private void SayRemarks(Spectrum spectrum)
     {

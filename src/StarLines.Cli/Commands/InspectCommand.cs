@@ -3,6 +3,7 @@ using System.CommandLine;
 using StarLines.Analysis;
 using StarLines.Cli.Options;
 using StarLines.Cli.Output;
+using StarLines.IO;
 
 namespace StarLines.Cli.Commands;
 
@@ -26,21 +27,33 @@ internal static class InspectCommand
             TableSink sink = table.Open(parsed, terminal);
             var summaries = new List<SpectrumSummary>();
             var sheets = new List<string>();
-            var loop = new InputLoop(terminal, reading.Files(parsed), reading.From(parsed)) { SaysRemarks = isTable };
-            int code = loop.ForEach("inspecting", spectrum =>
+            SpectrumReadOptions options = reading.From(parsed);
+            int code = new InputLoop(terminal, reading.Files(parsed), options).ForEachInput("inspecting", name =>
             {
-                provenance.AddInput(spectrum.Metadata.Source);
-                SpectrumSummary summary = SpectrumSummary.Of(spectrum);
-                summaries.Add(summary);
-                sheets.Add(SpectrumSheet.Write(summary));
+                SpectrumFileInspection file = name == InputLoop.StandardInput
+                    ? SpectrumReader.Inspect(terminal.In, InputLoop.StandardInputName, options)
+                    : SpectrumReader.Inspect(name, options);
+                provenance.AddInput(name);
+                sheets.Add(SpectrumSheet.Write(file));
+                foreach (Spectrum spectrum in file.Spectra)
+                {
+                    SpectrumSummary summary = SpectrumSummary.Of(spectrum);
+                    summaries.Add(summary);
+                    sheets.Add(SpectrumSheet.Write(summary));
+                }
+
+                if (file.Problem.Length > 0)
+                {
+                    throw new SpectrumFormatException(file.Problem);
+                }
             });
-            if (isTable && summaries.Count > 0)
+            if (!isTable)
+            {
+                terminal.Out.Write(string.Concat(sheets));
+            }
+            else if (summaries.Count > 0)
             {
                 sink.Write(SpectrumSummaryTable.Create(summaries), provenance);
-            }
-            else
-            {
-                terminal.Out.Write(string.Join('\n', sheets));
             }
 
             return code;

@@ -2,6 +2,7 @@ using System;
 using System.Globalization;
 using System.Text;
 using StarLines.Analysis;
+using StarLines.IO;
 using StarLines.Velocities.Time;
 
 namespace StarLines.Cli.Output;
@@ -14,7 +15,25 @@ internal static class SpectrumSheet
     /// <summary>Uncertainties this many times larger or smaller than the scatter of the flux are pointed at.</summary>
     private const double SuspiciousRatio = 2.0;
 
-    /// <summary>Writes the sheet, ending in a line feed.</summary>
+    /// <summary>Writes what a file holds: its HDUs where there are several, or where none gives a spectrum.</summary>
+    public static string Write(SpectrumFileInspection file)
+    {
+        var sheet = new StringBuilder();
+        if (file.Hdus.Count > 1 || file.Spectra.Count == 0)
+        {
+            sheet.Append(file.Name).Append('\n');
+            foreach (HduInspection hdu in file.Hdus)
+            {
+                string name = hdu.Name.Length == 0 ? "" : " " + hdu.Name;
+                string use = hdu.Use.Length > 0 ? ": " + hdu.Use : hdu.Problem.Length > 0 ? ": " + hdu.Problem : "";
+                Add(sheet, Text($"HDU {hdu.Number}"), $"{hdu.Kind}{name}, {hdu.Size}{use}");
+            }
+        }
+
+        return sheet.ToString();
+    }
+
+    /// <summary>Writes the sheet of a spectrum, ending in a line feed.</summary>
     public static string Write(SpectrumSummary summary)
     {
         var sheet = new StringBuilder();
