@@ -34,12 +34,10 @@ internal static class InspectCommand
                     ? SpectrumReader.Inspect(terminal.In, InputLoop.StandardInputName, options)
                     : SpectrumReader.Inspect(name, options);
                 provenance.AddInput(name);
-                sheets.Add(SpectrumSheet.Write(file));
-                foreach (Spectrum spectrum in file.Spectra)
+                sheets.Add(isTable ? "" : SpectrumSheet.Write(file));
+                foreach (Spectrum spectrum in isTable ? file.Spectra : [])
                 {
-                    SpectrumSummary summary = SpectrumSummary.Of(spectrum);
-                    summaries.Add(summary);
-                    sheets.Add(SpectrumSheet.Write(summary));
+                    summaries.Add(SpectrumSummary.Of(spectrum));
                 }
 
                 if (file.Problem.Length > 0)

@@ -15,30 +15,35 @@ internal static class SpectrumSheet
     /// <summary>Uncertainties this many times larger or smaller than the scatter of the flux are pointed at.</summary>
     private const double SuspiciousRatio = 2.0;
 
-    /// <summary>Writes what a file holds: its HDUs where there are several, or where none gives a spectrum.</summary>
+    /// <summary>Writes what a file holds: its name, its HDUs where there are several or none gives a spectrum, its spectra.</summary>
     public static string Write(SpectrumFileInspection file)
     {
         var sheet = new StringBuilder();
+        sheet.Append(file.Name).Append('\n');
         if (file.Hdus.Count > 1 || file.Spectra.Count == 0)
         {
-            sheet.Append(file.Name).Append('\n');
             foreach (HduInspection hdu in file.Hdus)
             {
-                string name = hdu.Name.Length == 0 ? "" : " " + hdu.Name;
-                string use = hdu.Use.Length > 0 ? ": " + hdu.Use : hdu.Problem.Length > 0 ? ": " + hdu.Problem : "";
-                Add(sheet, Text($"HDU {hdu.Number}"), $"{hdu.Kind}{name}, {hdu.Size}{use}");
+                Add(sheet, Text($"HDU {hdu.Number}"), Describe(hdu));
             }
+        }
+
+        foreach (Spectrum spectrum in file.Spectra)
+        {
+            if (file.Spectra.Count > 1)
+            {
+                sheet.Append(' ').Append(spectrum.Metadata.Source).Append('\n');
+            }
+
+            Write(sheet, SpectrumSummary.Of(spectrum));
         }
 
         return sheet.ToString();
     }
 
-    /// <summary>Writes the sheet of a spectrum, ending in a line feed.</summary>
-    public static string Write(SpectrumSummary summary)
+    private static void Write(StringBuilder sheet, SpectrumSummary summary)
     {
-        var sheet = new StringBuilder();
         SpectrumMetadata about = summary.Metadata;
-        sheet.Append(summary.Source).Append('\n');
         Add(sheet, "target", about.Target.Length == 0 ? "not given" : about.Target);
         Add(sheet, "position", Position(about));
         Add(sheet, "site", Site(about.Site));
@@ -56,8 +61,12 @@ internal static class SpectrumSheet
         {
             Add(sheet, "note", remark.Sentence);
         }
+    }
 
-        return sheet.ToString();
+    private static string Describe(HduInspection hdu)
+    {
+        string[] parts = [hdu.Kind, hdu.Name, hdu.Size, hdu.Use.Length > 0 ? "taken for " + hdu.Use : ""];
+        return string.Join(", ", Array.FindAll(parts, static part => part.Length > 0));
     }
 
     private static void Add(StringBuilder sheet, string label, string text)
@@ -108,13 +117,25 @@ internal static class SpectrumSheet
     {
         if (summary.Barycentre is not { } result)
         {
-            return "none: position, site or time is missing; say --ra --dec --site --time";
+            return "none, for want of " + string.Join(", ", Missing(summary.Metadata));
         }
 
         string text = Text($"{result.CorrectionKmPerS:+0.0000;-0.0000} km/s to the barycentre, BJD {result.BarycentricJdTdb.Value:0.00000} TDB");
         return summary.Frame is VelocityFrame.Barycentric or VelocityFrame.Heliocentric
             ? text + "; the file says it is applied already"
             : text;
+    }
+
+    private static string[] Missing(SpectrumMetadata about)
+    {
+        string[] missing =
+        [
+            about.RightAscensionDegrees is null || about.DeclinationDegrees is null ? "a position (--ra, --dec)" : "",
+            about.Site is null ? "a site (--site)" : "",
+            about.MidExposureUtc is null ? "a time (--time)" : "",
+        ];
+        string[] found = Array.FindAll(missing, static part => part.Length > 0);
+        return found.Length > 0 ? found : ["a time between 1960 and 2059"];
     }
 
     private static string Text(FormattableString text) => text.ToString(CultureInfo.InvariantCulture);
