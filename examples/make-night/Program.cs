@@ -16,7 +16,7 @@ internal static class Program
             return 2;
         }
 
-        var writer = new NightWriter(args[0], Lists.Read("metals-fgk"), Lists.Read("balmer"));
+        var writer = new NightWriter(args[0], LineListCatalog.Find("metals-fgk"), LineListCatalog.Find("balmer"));
         writer.Write(NightPlan.Exposures);
         return 0;
     }

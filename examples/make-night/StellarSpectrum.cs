@@ -1,5 +1,4 @@
 using System;
-using System.Collections.Generic;
 using StarLines.LineLists;
 using StarLines.Velocities;
 

@@ -35,27 +35,18 @@ internal static class Make
     /// <param name="read">Reads one value; throws <see cref="FormatException"/>.</param>
     /// <param name="mayRepeat">False for an option that shares this form and is given once.</param>
     public static Option<List<T>> Many<T>(
-        string name, string valueName, string description, Func<string, T> read, bool mayRepeat = true) => new(name)
+        string name, string valueName, string description, Func<string, T> read, bool mayRepeat = true)
     {
-        HelpName = valueName,
-        Description = mayRepeat ? description + " May repeat." : description,
-        Arity = mayRepeat ? ArgumentArity.OneOrMore : ArgumentArity.ExactlyOne,
-        AllowMultipleArgumentsPerToken = false,
-        DefaultValueFactory = static _ => [],
-        CustomParser = result =>
+        return new Option<List<T>>(name)
         {
-            var values = new List<T>(result.Tokens.Count);
-            foreach (Token token in result.Tokens)
-            {
-                if (Read(result, name, token.Value, read) is { } value)
-                {
-                    values.Add(value);
-                }
-            }
-
-            return values;
-        },
-    };
+            HelpName = valueName,
+            Description = mayRepeat ? description + " May repeat." : description,
+            Arity = mayRepeat ? ArgumentArity.OneOrMore : ArgumentArity.ExactlyOne,
+            AllowMultipleArgumentsPerToken = false,
+            DefaultValueFactory = static _ => [],
+            CustomParser = result => ReadAll(result, name, read),
+        };
+    }
 
     /// <summary>An option without a value.</summary>
     public static Option<bool> Flag(string name, string description) => new(name) { Description = description };
@@ -68,6 +59,20 @@ internal static class Make
             option.CompletionSources.Clear();
             option.CompletionSources.Add(words);
         }
+    }
+
+    private static List<T> ReadAll<T>(ArgumentResult result, string name, Func<string, T> read)
+    {
+        var values = new List<T>(result.Tokens.Count);
+        foreach (Token token in result.Tokens)
+        {
+            if (Read(result, name, token.Value, read) is { } value)
+            {
+                values.Add(value);
+            }
+        }
+
+        return values;
     }
 
     private static T? Read<T>(ArgumentResult result, string name, string text, Func<string, T> read)

@@ -1,7 +1,6 @@
 using System.Collections.Generic;
 using System.CommandLine;
 using StarLines.IO;
-using StarLines.Velocities;
 
 namespace StarLines.Cli.Options;
 

@@ -1,6 +1,5 @@
 using System.CommandLine;
 using StarLines.Cli.Output;
-using StarLines.Tables;
 
 namespace StarLines.Cli.Options;
 
