@@ -1,5 +1,6 @@
 using System;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
 namespace StarLines.Fits;
 

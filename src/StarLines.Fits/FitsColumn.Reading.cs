@@ -1,5 +1,7 @@
 using System;
 using System.Collections.Generic;
+using StarLines.Fits.Numerics;
+using StarLines.Fits.Tables;
 
 namespace StarLines.Fits;
 

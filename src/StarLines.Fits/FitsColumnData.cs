@@ -1,5 +1,7 @@
 using System;
 using System.Buffers.Binary;
+using StarLines.Fits.Numerics;
+using StarLines.Fits.Writing;
 
 namespace StarLines.Fits;
 

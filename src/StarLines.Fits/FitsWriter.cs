@@ -2,6 +2,8 @@ using System;
 using System.Buffers.Binary;
 using System.Collections.Generic;
 using System.IO;
+using StarLines.Fits.Tables;
+using StarLines.Fits.Writing;
 
 namespace StarLines.Fits;
 

@@ -1,4 +1,5 @@
 using System;
+using StarLines.Fits.Numerics;
 
 namespace StarLines.Fits;
 

@@ -2,6 +2,7 @@ using System;
 using System.IO;
 using BenchmarkDotNet.Attributes;
 using StarLines.Fits;
+using StarLines.Fits.Numerics;
 
 namespace StarLines.Benchmarks;
 

@@ -1,6 +1,7 @@
 using System;
 using System.Buffers.Binary;
 using System.Runtime.InteropServices;
+using StarLines.Fits.Numerics;
 using Xunit;
 
 namespace StarLines.Fits.Tests;

@@ -3,7 +3,7 @@ using System.Buffers.Binary;
 using System.Runtime.InteropServices;
 using System.Runtime.Intrinsics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>Big-endian floating-point numbers to doubles. Every kernel keeps NaN and infinity; source and destination must not overlap.</summary>
 internal static class BigEndian

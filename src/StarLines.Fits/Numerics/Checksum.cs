@@ -3,7 +3,7 @@ using System.Buffers.Binary;
 using System.Runtime.InteropServices;
 using System.Runtime.Intrinsics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>The ones' complement sum of big-endian 32-bit words. Source: FITS Standard 4.0, appendix J.</summary>
 internal static class Checksum

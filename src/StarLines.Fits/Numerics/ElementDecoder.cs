@@ -1,6 +1,6 @@
 using System;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>Stored values of any type to doubles or integers.</summary>
 internal static class ElementDecoder

@@ -1,4 +1,4 @@
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>The types of stored values, as images (BITPIX) and columns (TFORM letter) share them.</summary>
 internal enum ElementType

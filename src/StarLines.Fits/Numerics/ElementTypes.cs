@@ -1,6 +1,6 @@
 using System;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>Facts about the types of stored values.</summary>
 internal static class ElementTypes

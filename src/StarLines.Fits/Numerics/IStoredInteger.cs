@@ -1,7 +1,7 @@
 using System;
 using System.Buffers.Binary;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>A stored integer; the loops over integers are compiled once for each type.</summary>
 internal interface IStoredInteger

@@ -1,4 +1,4 @@
-namespace StarLines.Fits;
+namespace StarLines.Fits.Numerics;
 
 /// <summary>How a stored number becomes a value: value = zero + scale × stored, and which stored integer means "undefined".</summary>
 internal readonly record struct Scaling(double Scale, double Zero, long? Null)

@@ -1,7 +1,8 @@
 using System;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>The cells of an ASCII table. Source: FITS Standard 4.0, section 7.2.</summary>
 internal static class AsciiCells

@@ -1,7 +1,7 @@
 using System;
 using System.Globalization;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>What a TFORM of an ASCII table says.</summary>
 /// <param name="Letter">A, I, F, E or D.</param>

@@ -1,7 +1,8 @@
 using System;
 using System.Buffers.Binary;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>The bytes of the cells of a binary table.</summary>
 internal static class BinaryCells

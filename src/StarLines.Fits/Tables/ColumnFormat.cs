@@ -1,7 +1,8 @@
 using System;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>What a TFORM of a binary table says.</summary>
 /// <param name="Repeat">Elements in a cell; for a variable-length column the repeat of its descriptor, 0 or 1.</param>

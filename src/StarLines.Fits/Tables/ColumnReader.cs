@@ -1,8 +1,9 @@
 using System;
 using System.Collections.Generic;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>Reads the column keywords of a table.</summary>
 internal static class ColumnReader

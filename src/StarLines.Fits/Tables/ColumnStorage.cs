@@ -1,4 +1,4 @@
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>Where a column lies in the row and how it is stored.</summary>
 /// <param name="Form">The TFORM as it is written.</param>

@@ -1,6 +1,6 @@
 using System;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tables;
 
 /// <summary>Where the rows and the heap of a table lie.</summary>
 internal sealed class TableLayout
@@ -42,6 +42,11 @@ internal sealed class TableLayout
         }
 
         long rowBytes = hdu.Axes[0];
+        if (rowBytes > Array.MaxLength)
+        {
+            throw data.Context.Error("NAXIS1", FormattableString.Invariant($"a row of {rowBytes} bytes is longer than {Array.MaxLength}, the most that is read; the header is damaged."));
+        }
+
         long stated = hdu.Axes[1];
         long rows = rowBytes == 0 ? 0 : Math.Min(stated, data.StoredBytes / rowBytes);
         if (rows == 0 && stated > 0)

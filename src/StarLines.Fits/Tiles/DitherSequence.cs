@@ -1,4 +1,4 @@
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>
 /// The random numbers of subtractive dithering: 10000 values of the generator of Park and Miller (1988), Communications of the ACM 31, 1192,

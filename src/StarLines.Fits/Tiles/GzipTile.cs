@@ -1,8 +1,9 @@
 using System;
 using System.IO;
 using System.IO.Compression;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>GZIP_1 and GZIP_2 tiles: gzip of the big-endian pixels; in GZIP_2 all first bytes come first, then all second bytes, and so on.</summary>
 internal static class GzipTile

@@ -1,7 +1,7 @@
 using System;
 using System.Buffers.Binary;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>
 /// PLIO_1: a list of 16-bit instructions that paint runs of pixels with a value that goes up and down; for masks.

@@ -1,6 +1,6 @@
 using System;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>How the integers of a quantized tile become real numbers. Source: FITS Standard 4.0, section 10.2.</summary>
 internal sealed class Quantization

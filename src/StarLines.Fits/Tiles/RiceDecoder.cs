@@ -1,7 +1,7 @@
 using System;
 using System.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>
 /// RICE_1: differences of neighbouring pixels, folded to non-negative numbers; in each block the low bits are stored as they are and the high part

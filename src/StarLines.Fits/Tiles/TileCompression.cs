@@ -1,7 +1,8 @@
 using System;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>The algorithm of ZCMPTYPE with its parameters.</summary>
 internal sealed class TileCompression

@@ -1,6 +1,7 @@
 using System;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>The content of single tiles: one row of the table each.</summary>
 internal sealed class TileDecoder

@@ -1,6 +1,6 @@
 using System;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>How an image of any number of axes is cut into tiles, first axis fastest; the tiles at the far edges are smaller.</summary>
 internal sealed class TileGrid

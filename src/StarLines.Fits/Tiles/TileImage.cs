@@ -1,7 +1,8 @@
 using System;
 using System.Globalization;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Tiles;
 
 /// <summary>A tile-compressed image. Source: FITS Standard 4.0, section 10.1.</summary>
 internal sealed class TileImage

@@ -2,7 +2,7 @@ using System;
 using System.Globalization;
 using System.Text;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Writing;
 
 /// <summary>FITS text is printable ASCII: accents are dropped, what has no ASCII form becomes a question mark.</summary>
 internal static class AsciiText

@@ -3,7 +3,7 @@ using System.Buffers;
 using System.Collections.Generic;
 using System.Globalization;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Writing;
 
 /// <summary>Lays out header cards: fixed format where the value allows it, CONTINUE for long strings, HIERARCH for long keywords.</summary>
 internal sealed class CardWriter

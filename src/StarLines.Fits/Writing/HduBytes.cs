@@ -2,8 +2,9 @@ using System;
 using System.Globalization;
 using System.IO;
 using System.Text;
+using StarLines.Fits.Numerics;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Writing;
 
 /// <summary>
 /// Puts one HDU on a stream. The data are produced twice: first for their checksum, which stands before them, then to be written; so nothing is held in memory

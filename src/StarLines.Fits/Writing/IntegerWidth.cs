@@ -1,7 +1,7 @@
 using System;
 using System.Buffers.Binary;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Writing;
 
 /// <summary>The stored integer type that holds a set of values.</summary>
 /// <param name="Letter">Its TFORM letter.</param>

@@ -1,8 +1,9 @@
 using System;
 using System.Collections.Generic;
 using System.Globalization;
+using StarLines.Fits.Tables;
 
-namespace StarLines.Fits;
+namespace StarLines.Fits.Writing;
 
 /// <summary>The cards and rows of a binary table that is written.</summary>
 internal sealed class TableBytes
