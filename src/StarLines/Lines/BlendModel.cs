@@ -258,7 +258,7 @@ internal sealed partial class BlendModel : INormalEquations
 
     private static int PixelAt(ReadOnlySpan<double> edges, double position)
     {
-        int found = edges.BinarySearch(position);
+        int found = edges.BinarySearch<double, double>(position);
         return found >= 0 ? found : ~found - 1;
     }
 }
