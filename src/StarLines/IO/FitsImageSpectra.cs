@@ -96,7 +96,8 @@ internal static class FitsImageSpectra
 
             if (labels.Mask >= 0)
             {
-                pixels.Faults = Noise.ToFaults(ReadRow(image, start + (labels.Mask * stride), count));
+                double[] mask = ReadRow(image, start + (labels.Mask * stride), count);
+                pixels.Faults = labels.MaskIsOfSurvey ? Noise.ToSurveyFaults(mask) : Noise.ToFaults(mask);
             }
         }
 

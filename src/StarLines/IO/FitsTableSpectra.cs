@@ -106,7 +106,9 @@ internal static class FitsTableSpectra
         {
             string comment = new FitsKeywords(hdu.Header).Comment(string.Create(CultureInfo.InvariantCulture, $"TTYPE{plan.Mask}"));
             bool oneIsGood = comment.Contains("1=good", StringComparison.OrdinalIgnoreCase) || comment.Contains("0=bad", StringComparison.OrdinalIgnoreCase);
-            pixels.Faults = Noise.ToFaults(mask, !oneIsGood);
+            pixels.Faults = plan.Noise != 0 && Noise.IsSurveyMask(table.Columns[plan.Mask - 1].Name, plan.NoiseForm)
+                ? Noise.ToSurveyFaults(mask)
+                : Noise.ToFaults(mask, !oneIsGood);
         }
     }
 

@@ -33,6 +33,9 @@ internal sealed class ImageRows
     /// <summary>The row of the mask, from 0; −1 where there is none.</summary>
     internal int Mask => Array.IndexOf(_roles, ColumnRole.Mask);
 
+    /// <summary>Whether the mask is the and-mask of a fibre survey.</summary>
+    internal bool MaskIsOfSurvey { get; private init; }
+
     /// <summary>Reads the labels; null where the rows have none.</summary>
     /// <param name="header">The header of the image.</param>
     /// <param name="count">Number of rows or planes.</param>
@@ -49,7 +52,14 @@ internal sealed class ImageRows
             any |= role != ColumnRole.None;
         }
 
-        return any && Array.IndexOf(roles, ColumnRole.Flux) >= 0 ? new ImageRows(roles) : null;
+        return any && Array.IndexOf(roles, ColumnRole.Flux) >= 0 ? new ImageRows(roles) { MaskIsOfSurvey = IsOfSurvey(roles, labels) } : null;
+    }
+
+    private static bool IsOfSurvey(ColumnRole[] roles, List<string> labels)
+    {
+        int mask = Array.IndexOf(roles, ColumnRole.Mask);
+        return mask >= 0 && Array.IndexOf(roles, ColumnRole.InverseVariance) >= 0
+            && IO.Noise.IsSurveyMask(labels[mask], NoiseForm.InverseVariance);
     }
 
     private static List<string> Labels(HeaderKeywords header, int count)
