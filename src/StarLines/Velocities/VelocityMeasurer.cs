@@ -36,21 +36,41 @@ public static class VelocityMeasurer
     public static VelocityResult[] MeasureAll(
         Spectrum spectrum, ContinuumFit continuum, IReadOnlyList<LineTemplate> templates, VelocityOptions? options = null)
     {
+        ArgumentNullException.ThrowIfNull(templates);
+        var families = new TemplateFamily[templates.Count];
+        for (int k = 0; k < families.Length; k++)
+        {
+            families[k] = new TemplateFamily(templates[k]);
+        }
+
+        return MeasureFamilies(spectrum, continuum, families, options);
+    }
+
+    /// <summary>Measures the velocity with the best member of each of several families of templates.</summary>
+    /// <param name="spectrum">The spectrum; where it has no uncertainties they are estimated from the flux itself.</param>
+    /// <param name="continuum">Its continuum, pixel by pixel.</param>
+    /// <param name="families">The families; keep them for the next spectrum.</param>
+    /// <param name="options">Range and other choices.</param>
+    /// <returns>One result a family, in their order.</returns>
+    /// <exception cref="ArgumentException">The lengths differ, or an option is out of range.</exception>
+    public static VelocityResult[] MeasureFamilies(
+        Spectrum spectrum, ContinuumFit continuum, IReadOnlyList<TemplateFamily> families, VelocityOptions? options = null)
+    {
         ArgumentNullException.ThrowIfNull(spectrum);
         ArgumentNullException.ThrowIfNull(continuum);
-        ArgumentNullException.ThrowIfNull(templates);
+        ArgumentNullException.ThrowIfNull(families);
         options ??= new VelocityOptions();
         Guard.SameLength(continuum.Count, spectrum.Count, nameof(continuum));
         Guard.Between(options.SearchHalfRangeKmPerS, 10.0, 10_000.0, nameof(options.SearchHalfRangeKmPerS), "km/s");
         Guard.Between(options.FalseAlarmProbability, 1e-12, 0.5, nameof(options.FalseAlarmProbability), "");
-        var results = new VelocityResult[templates.Count];
-        PreparedSpectrum? prepared = PreparedSpectrum.Of(spectrum, continuum, templates, options);
+        var results = new VelocityResult[families.Count];
+        PreparedSpectrum? prepared = PreparedSpectrum.Of(spectrum, continuum, families, options);
         for (int k = 0; k < results.Length; k++)
         {
             results[k] = prepared is null
-                ? Nothing(templates[k].Name, VelocityStatus.Failed, new Remark(
+                ? Nothing(families[k].Name, VelocityStatus.Failed, new Remark(
                     "too-few-pixels", $"Fewer than {FewestPixels} pixels can be used: a velocity needs more."))
-                : new VelocityRun(prepared, templates[k], options).Result();
+                : new VelocityRun(prepared, families[k], options).Result();
         }
 
         return results;
@@ -80,7 +100,7 @@ public static class VelocityMeasurer
         internal List<Remark> Remarks { get; }
 
         internal static PreparedSpectrum? Of(
-            Spectrum spectrum, ContinuumFit continuum, IReadOnlyList<LineTemplate> templates, VelocityOptions options)
+            Spectrum spectrum, ContinuumFit continuum, IReadOnlyList<TemplateFamily> families, VelocityOptions options)
         {
             if (spectrum.Count < FewestPixels)
             {
@@ -112,7 +132,7 @@ public static class VelocityMeasurer
                 return null;
             }
 
-            CorrelationGrid? kept = templates.Count > 0 ? templates[0].KeptGrid : null;
+            CorrelationGrid? kept = families.Count > 0 ? families[0].Members[0].KeptGrid : null;
             CorrelationGrid grid = residual.GridFor(kept, options.SearchHalfRangeKmPerS);
             return new PreparedSpectrum(spectrum, residual, new CorrelationSearch(residual, grid), remarks);
         }

@@ -95,23 +95,32 @@ public sealed class VelocityResult
         return With(reduced, Second?.Reduced(correction));
     }
 
+    /// <summary>The same result with the velocity of several templates.</summary>
+    internal VelocityResult Combined(VelocityMeasurement measurement, Measured observed, int linesUsed, int linesLeftOut) =>
+        Copy(measurement, Second, observed, linesUsed, linesLeftOut);
+
     /// <summary>The same result with another measurement: reduced, or with more warnings.</summary>
     internal VelocityResult With(VelocityMeasurement measurement) => With(measurement, Second);
 
     /// <summary>The same result with another measurement and another second star.</summary>
-    internal VelocityResult With(VelocityMeasurement measurement, VelocityResult? second) => new(measurement, _velocities, _correlation)
-    {
-        Frame = Frame,
-        ObservedKmPerS = ObservedKmPerS,
-        PeakKmPerS = PeakKmPerS,
-        TonryDavisErrorKmPerS = TonryDavisErrorKmPerS,
-        Significance = Significance,
-        LineScatterKmPerS = LineScatterKmPerS,
-        ReducedChiSquare = ReducedChiSquare,
-        Depth = Depth,
-        BroadeningFwhmKmPerS = BroadeningFwhmKmPerS,
-        LinesUsed = LinesUsed,
-        LinesLeftOut = LinesLeftOut,
-        Second = second,
-    };
+    internal VelocityResult With(VelocityMeasurement measurement, VelocityResult? second) =>
+        Copy(measurement, second, ObservedKmPerS, LinesUsed, LinesLeftOut);
+
+    private VelocityResult Copy(
+        VelocityMeasurement measurement, VelocityResult? second, Measured observed, int linesUsed, int linesLeftOut) =>
+        new(measurement, _velocities, _correlation)
+        {
+            Frame = Frame,
+            ObservedKmPerS = observed,
+            PeakKmPerS = PeakKmPerS,
+            TonryDavisErrorKmPerS = TonryDavisErrorKmPerS,
+            Significance = Significance,
+            LineScatterKmPerS = LineScatterKmPerS,
+            ReducedChiSquare = ReducedChiSquare,
+            Depth = Depth,
+            BroadeningFwhmKmPerS = BroadeningFwhmKmPerS,
+            LinesUsed = linesUsed,
+            LinesLeftOut = linesLeftOut,
+            Second = second,
+        };
 }

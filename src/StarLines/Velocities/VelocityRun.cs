@@ -25,21 +25,23 @@ internal sealed class VelocityRun
     private readonly ResidualSpectrum _residual;
     private readonly CorrelationSearch _search;
     private readonly LineTemplate _template;
+    private readonly string _name;
     private readonly VelocityOptions _options;
     private readonly Spectrum _spectrum;
     private readonly List<Remark> _remarks;
     private readonly double _stepKmPerS;
 
-    /// <summary>Joins spectrum and template.</summary>
-    internal VelocityRun(VelocityMeasurer.PreparedSpectrum prepared, LineTemplate template, VelocityOptions options)
+    /// <summary>Joins spectrum and templates, and chooses the member whose correlation is highest.</summary>
+    internal VelocityRun(VelocityMeasurer.PreparedSpectrum prepared, TemplateFamily family, VelocityOptions options)
     {
         _spectrum = prepared.Spectrum;
         _residual = prepared.Residual;
         _search = prepared.Search;
-        _template = template;
+        _name = family.Name;
         _options = options;
         _remarks = [.. prepared.Remarks];
         _stepKmPerS = PhysicalConstants.SpeedOfLightKmPerS * _search.Grid.LogStep;
+        _template = family.Members.Count == 1 ? family.Members[0] : Best(family);
     }
 
     /// <summary>Resolving power of the instrument; NaN where unknown.</summary>
@@ -51,7 +53,7 @@ internal sealed class VelocityRun
         TemplateTransform? transform = _template.TransformOn(_search.Grid, _residual.Assumed);
         if (transform is null || !transform.HasAbsorption)
         {
-            return VelocityMeasurer.Nothing(_template.Name, VelocityStatus.OffSpectrum);
+            return VelocityMeasurer.Nothing(_name, VelocityStatus.OffSpectrum);
         }
 
         double narrowest = _template.WidthsKnown ? 0.0 : InstrumentVariance();
@@ -65,6 +67,28 @@ internal sealed class VelocityRun
         bool wider = broadening > narrowest || IsWider(peak, transform, narrowest);
         VelocityFit fit = Fit(transform, start, StartingWidth(peak, transform, narrowest), !_template.WidthsKnown || wider);
         return Summarize(c, peak, fit, transform);
+    }
+
+    private LineTemplate Best(TemplateFamily family)
+    {
+        LineTemplate best = family.Members[0];
+        double highest = double.NegativeInfinity;
+        foreach (LineTemplate member in family.Members)
+        {
+            TemplateTransform? transform = member.TransformOn(_search.Grid, _residual.Assumed);
+            if (transform is { HasAbsorption: true })
+            {
+                double[] c = _search.Correlate(transform, member.WidthsKnown ? 0.0 : InstrumentVariance());
+                double height = System.Numerics.Tensors.TensorPrimitives.Max<double>(c);
+                if (height > highest)
+                {
+                    highest = height;
+                    best = member;
+                }
+            }
+        }
+
+        return best;
     }
 
     private VelocityFit Fit(TemplateTransform transform, double start, double broadening, bool fitBroadening)
@@ -158,7 +182,7 @@ internal sealed class VelocityRun
 
         var measurement = new VelocityMeasurement
         {
-            Template = _template.Name,
+            Template = _name,
             Status = VelocityStatus.NoPeak,
             PeakHeight = peak.Height,
             Pixels = _residual.Used,
@@ -191,7 +215,7 @@ internal sealed class VelocityRun
         bool reduced = _spectrum.Scale.Frame is VelocityFrame.Barycentric or VelocityFrame.Heliocentric or VelocityFrame.Rest;
         var measurement = new VelocityMeasurement
         {
-            Template = _template.Name,
+            Template = _name,
             Status = reduced ? VelocityStatus.Measured : VelocityStatus.Topocentric,
             VelocityKmPerS = reduced ? observed : Measured.None,
             TopocentricKmPerS = reduced ? double.NaN : velocity,
