@@ -7,8 +7,20 @@ namespace StarLines.Templates;
 /// <summary>The templates that need no file: Balmer lines of several widths, metal lines of several temperatures.</summary>
 public static class BuiltInTemplates
 {
-    /// <summary>Full widths at half maximum of the Balmer lines, Å, from cool or evolved stars to A dwarfs; common practice, no source.</summary>
-    private static readonly double[] s_balmerFwhm = [1.5, 4.0, 9.0, 18.0];
+    /// <summary>
+    /// Full widths at half maximum of the wings of the Balmer lines, Å, from cool or evolved stars (none) to A dwarfs;
+    /// common practice, no source.
+    /// </summary>
+    private static readonly double[] s_wingFwhm = [0.0, 4.0, 9.0, 18.0];
+
+    /// <summary>Full width of the core that all hydrogen lines have, Å at H-beta, and depths of core and wings; common practice, no source.</summary>
+    private const double CoreFwhm = 1.2;
+
+    private const double CoreDepth = 0.35;
+
+    private const double WingDepth = 0.5;
+
+    private const double HBeta = 4861.0;
 
     /// <summary>Effective temperatures of the metal templates, K.</summary>
     private static readonly double[] s_temperatures = [4000.0, 5000.0, 6000.0, 7500.0, 10_000.0, 14_000.0, 20_000.0, 30_000.0];
@@ -41,9 +53,7 @@ public static class BuiltInTemplates
             }
         }
 
-        var chosen = new LineList(list.Name, list.Medium, kept, list.Sha256);
-        return new TemplateFamily("balmer", Array.ConvertAll(s_balmerFwhm, fwhm => LineTemplate.FromLineList(
-            chosen, new TemplateOptions { Name = "balmer", HydrogenFwhmAngstrom = fwhm })));
+        return new TemplateFamily("balmer", Array.ConvertAll(s_wingFwhm, fwhm => Hydrogen(kept, list.Medium, fwhm)));
     }
 
     /// <summary>Metal and helium lines, from <c>metals-fgk</c> and <c>early-type</c> of the built-in lists.</summary>
@@ -74,6 +84,28 @@ public static class BuiltInTemplates
         var list = new LineList("metal", cool.Medium, lines);
         return new TemplateFamily("metal", Array.ConvertAll(s_temperatures, temperature => LineTemplate.FromLineList(
             list, new TemplateOptions { Name = "metal", TemperatureKelvin = temperature })));
+    }
+
+    /// <summary>Each line as a narrow core, which holds the velocity, on wings.</summary>
+    private static LineTemplate Hydrogen(List<RestLine> lines, Medium medium, double wingFwhm)
+    {
+        var profiles = new List<TemplateLine>();
+        foreach (RestLine line in lines)
+        {
+            profiles.Add(new TemplateLine
+            {
+                Name = line.Name,
+                WavelengthAngstrom = line.WavelengthAngstrom,
+                Depth = CoreDepth,
+                FwhmAngstrom = CoreFwhm * line.WavelengthAngstrom / HBeta,
+            });
+            if (wingFwhm > 0.0)
+            {
+                profiles.Add(profiles[^1] with { Depth = WingDepth, FwhmAngstrom = wingFwhm, Shape = LineShape.Stark });
+            }
+        }
+
+        return LineTemplate.FromLines("balmer", medium, profiles, widthsKnown: false);
     }
 
     private static bool Holds(List<RestLine> lines, RestLine line)

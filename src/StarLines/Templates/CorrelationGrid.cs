@@ -1,4 +1,5 @@
 using System;
+using System.Numerics;
 using StarLines.Numerics;
 
 namespace StarLines.Templates;
@@ -12,8 +13,11 @@ internal sealed class CorrelationGrid
     /// <summary>Steps are 2^(−k/8): at most 9 % finer than asked for.</summary>
     private const double StepsPerOctave = 8.0;
 
-    /// <summary>Start and length are multiples of this many pixels.</summary>
-    private const int Raster = 128;
+    /// <summary>Start and length are multiples of about this part of the length.</summary>
+    private const int RasterParts = 64;
+
+    /// <summary>Shortest raster, in pixels.</summary>
+    private const int LeastRaster = 64;
 
     private CorrelationGrid(int stepNumber, long first, int count, int maximumLag)
     {
@@ -62,12 +66,14 @@ internal sealed class CorrelationGrid
         // A hair of tolerance: pixels that are exactly on the raster stay on it.
         int stepNumber = (int)Math.Floor((Math.Log2(finestLogStep) * StepsPerOctave) + 1e-6);
         double step = Math.Pow(2.0, stepNumber / StepsPerOctave);
-        long first = (long)Math.Floor(((Math.Log(minimumAngstrom) / step) + 0.5) / Raster) * Raster;
-        int count = (int)Math.Ceiling((((Math.Log(maximumAngstrom) / step) - 0.5) - first + 1.0) / Raster) * Raster;
+        uint part = (uint)(Math.Log(maximumAngstrom / minimumAngstrom) / step / RasterParts);
+        int raster = Math.Max(LeastRaster, (int)BitOperations.RoundUpToPowerOf2(Math.Max(part, 1u)));
+        long first = (long)Math.Floor(((Math.Log(minimumAngstrom) / step) + 0.5) / raster) * raster;
+        int count = (int)Math.Ceiling((((Math.Log(maximumAngstrom) / step) - 0.5) - first + 1.0) / raster) * raster;
         int lag = (int)Math.Ceiling(halfRange / step) + 2;
         return kept is not null && kept._stepNumber == stepNumber && kept.First == first && kept.Count == count && kept.MaximumLag == lag
             ? kept
-            : new CorrelationGrid(stepNumber, first, Math.Max(count, Raster), lag);
+            : new CorrelationGrid(stepNumber, first, Math.Max(count, raster), lag);
     }
 
     /// <summary>Whether another grid is the same.</summary>

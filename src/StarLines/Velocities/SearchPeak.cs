@@ -57,6 +57,7 @@ internal readonly record struct SearchPeak
                 ZuckerError = double.NaN,
                 Ratio = double.NaN,
                 TonryDavisError = double.NaN,
+                Significance = Sureness(c, index, c[Math.Max(index, 0)], double.NaN, pixels),
                 AtEnd = true,
             };
         }

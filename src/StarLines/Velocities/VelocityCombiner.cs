@@ -33,14 +33,20 @@ public static class VelocityCombiner
         int lines = 0;
         int leftOut = 0;
         int measured = 0;
+        bool fitted = false;
         foreach (VelocityResult result in results)
         {
-            if (Weight(result) > Weight(best))
+            fitted |= result.LinesUsed > 0;
+        }
+
+        foreach (VelocityResult result in results)
+        {
+            if (Counts(result, fitted) && (!Counts(best, fitted) || Weight(result) > Weight(best)))
             {
                 best = result;
             }
 
-            if (result.ObservedKmPerS.HasValue)
+            if (Counts(result, fitted))
             {
                 double weight = Weight(result);
                 total += weight;
@@ -64,7 +70,7 @@ public static class VelocityCombiner
         double chi = 0.0;
         foreach (VelocityResult result in results)
         {
-            chi += result.ObservedKmPerS.HasValue ? Weight(result) * Square(result.ObservedKmPerS.Value - mean) : 0.0;
+            chi += Counts(result, fitted) ? Weight(result) * Square(result.ObservedKmPerS.Value - mean) : 0.0;
         }
 
         double inflation = Math.Sqrt(Math.Max(1.0, chi / (measured - 1)));
@@ -80,12 +86,16 @@ public static class VelocityCombiner
             Template = name,
             VelocityKmPerS = reduced ? observed : Measured.None,
             TopocentricKmPerS = reduced ? double.NaN : mean,
+            TopocentricUncertaintyKmPerS = reduced ? double.NaN : observed.Uncertainty,
             PhotonLimitKmPerS = photon > 0.0 ? 1.0 / Math.Sqrt(photon) : double.NaN,
             Pixels = pixels,
             Warnings = warnings,
         };
         return best.Combined(measurement, observed, lines, leftOut);
     }
+
+    /// <summary>Whether a result counts: a velocity of the peak alone only where no template could be fitted.</summary>
+    private static bool Counts(VelocityResult result, bool fitted) => result.ObservedKmPerS.HasValue && (!fitted || result.LinesUsed > 0);
 
     private static double Weight(VelocityResult result) =>
         result.ObservedKmPerS.Uncertainty > 0.0 ? 1.0 / Square(result.ObservedKmPerS.Uncertainty) : 0.0;

@@ -19,6 +19,9 @@ internal sealed class VelocityFit
 
     private const int FewestIterations = 2;
 
+    /// <summary>No star turns so fast: 250 km/s squared is the variance of v sin i = 530 km/s; instruments of R under 500 are wider.</summary>
+    private const double LargestBroadening = 62_500.0;
+
     /// <summary>Converged when a step is below this part of the uncertainty: 1 % adds nothing to it.</summary>
     private const double Convergence = 0.01;
 
@@ -42,13 +45,18 @@ internal sealed class VelocityFit
     private readonly int[] _place;
     private readonly int _pixels;
     private readonly bool _fitBroadening;
+    private readonly double _start;
+    private readonly double _reach;
     private double _depthMean;
     private double _depthSigma;
     private double _pooledInflation = 1.0;
 
-    private VelocityFit(ResidualSpectrum spectrum, TemplateProfile profile, double logShift, double broadening, bool fitBroadening)
+    private VelocityFit(
+        ResidualSpectrum spectrum, TemplateProfile profile, double logShift, double reach, double broadening, bool fitBroadening)
     {
         _spectrum = spectrum;
+        _start = logShift;
+        _reach = reach;
         _profile = profile;
         LogShift = logShift;
         Broadening = broadening;
@@ -114,12 +122,13 @@ internal sealed class VelocityFit
     /// <param name="spectrum">The spectrum.</param>
     /// <param name="profile">The template.</param>
     /// <param name="logShift">ζ = ln(1 + z) to start from, good to a line width.</param>
+    /// <param name="reach">How far ζ may move from there.</param>
     /// <param name="broadening">Widening to start from, (km/s)².</param>
     /// <param name="fitBroadening">Whether the widening is fitted.</param>
     internal static VelocityFit Run(
-        ResidualSpectrum spectrum, TemplateProfile profile, double logShift, double broadening, bool fitBroadening)
+        ResidualSpectrum spectrum, TemplateProfile profile, double logShift, double reach, double broadening, bool fitBroadening)
     {
-        var fit = new VelocityFit(spectrum, profile, logShift, broadening, fitBroadening);
+        var fit = new VelocityFit(spectrum, profile, logShift, reach, broadening, fitBroadening);
         fit.Iterate();
         ArrayPool<double>.Shared.Return(fit._memory);
         return fit;
@@ -153,7 +162,7 @@ internal sealed class VelocityFit
             double sigma = Math.Sqrt(Joint.Variance);
             double limit = Math.Max(3.0 * sigma, LongestStep());
             double step = Math.Clamp(Joint.Step, -limit, limit);
-            LogShift += step;
+            LogShift = Math.Clamp(LogShift + step, _start - _reach, _start + _reach);
             bool settled = Widen(broadeningStep);
             if (settled && iteration >= FewestIterations && Math.Abs(step) < Convergence * sigma)
             {
@@ -165,6 +174,7 @@ internal sealed class VelocityFit
         }
 
         Converged |= Math.Abs(Joint.Step) < Math.Sqrt(Joint.Variance);
+        Converged &= Math.Abs(LogShift - _start) < 0.999 * _reach;
         Summarize();
     }
 
@@ -177,7 +187,7 @@ internal sealed class VelocityFit
         }
 
         double before = Broadening;
-        Broadening = Math.Max(0.0, before + Math.Clamp(step, -0.7 * before, 50.0 + (2.0 * before)));
+        Broadening = Math.Clamp(before + Math.Clamp(step, -0.7 * before, 50.0 + (2.0 * before)), 0.0, LargestBroadening);
         return Math.Abs(Broadening - before) <= Math.Max(0.1 * BroadeningSigma, 1e-3 * before);
     }
 

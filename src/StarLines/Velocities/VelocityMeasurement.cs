@@ -20,6 +20,9 @@ public sealed record VelocityMeasurement
     /// <summary>Radial velocity as the telescope saw it, km/s.</summary>
     public double TopocentricKmPerS { get; init; } = double.NaN;
 
+    /// <summary>Uncertainty of <see cref="TopocentricKmPerS"/>, km/s, one standard deviation; the reduction adds nothing to it.</summary>
+    public double TopocentricUncertaintyKmPerS { get; init; } = double.NaN;
+
     /// <summary>Barycentric correction c z_B, km/s; (1 + z_true) = (1 + z_measured)(1 + z_B).</summary>
     public double BarycentricCorrectionKmPerS { get; init; } = double.NaN;
 

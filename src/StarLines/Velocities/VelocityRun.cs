@@ -19,6 +19,15 @@ internal sealed class VelocityRun
     /// <summary>A wider template is taken where its peak is higher by this factor.</summary>
     private const double BetterRatio = 1.03;
 
+    /// <summary>Lines that belong together scatter by less than this many standard deviations of their profile.</summary>
+    private const double LargestScatter = 2.0;
+
+    /// <summary>So many lines are needed to know their scatter.</summary>
+    private const int FewestScattered = 6;
+
+    /// <summary>A peak wider than the range cannot be set against its surroundings: it must stand out by this much more.</summary>
+    private const double UnboundedFactor = 2.0;
+
     /// <summary>FWHM in pixels of an instrument that samples as is usual, where nothing is known; common practice, no source.</summary>
     private const double UsualSampling = 2.2;
 
@@ -65,8 +74,23 @@ internal sealed class VelocityRun
 
         double start = peak.Lag * _search.Grid.LogStep;
         bool wider = broadening > narrowest || IsWider(peak, transform, narrowest);
-        VelocityFit fit = Fit(transform, start, StartingWidth(peak, transform, narrowest), !_template.WidthsKnown || wider);
-        return Summarize(c, peak, fit, transform);
+        VelocityFit fit = Fit(transform, start, Reach(peak), StartingWidth(peak, transform, narrowest), !_template.WidthsKnown || wider);
+
+        // Neither a fit nor a peak with two sides: nothing that could be given an error.
+        return IsScattered(fit, transform) || (!IsFitted(fit) && double.IsNaN(peak.Width)) ? NoPeak(c, peak) : Summarize(c, peak, fit);
+    }
+
+    /// <summary>How far the fit may move from the peak: three quarters of its width, or an eighth of the range where it is wider than that.</summary>
+    private double Reach(SearchPeak peak) =>
+        _search.Grid.LogStep * Math.Max(3.0, double.IsNaN(peak.Width) ? 0.25 * _search.Grid.MaximumLag : 0.75 * peak.Width);
+
+    /// <summary>Whether the lines, one by one, lie further from each other than they are wide: then the peak came by chance.</summary>
+    private static bool IsScattered(VelocityFit fit, TemplateTransform transform)
+    {
+        double fwhm2 = PhysicalConstants.FwhmPerSigma * PhysicalConstants.FwhmPerSigma;
+        double width = Math.Sqrt((transform.FwhmKmPerS * transform.FwhmKmPerS) + (fwhm2 * fit.Broadening)) / PhysicalConstants.FwhmPerSigma;
+        return fit.Joint.Used >= FewestScattered
+            && Math.Sqrt(fit.Joint.Scatter) * PhysicalConstants.SpeedOfLightKmPerS > LargestScatter * width;
     }
 
     private LineTemplate Best(TemplateFamily family)
@@ -91,14 +115,14 @@ internal sealed class VelocityRun
         return best;
     }
 
-    private VelocityFit Fit(TemplateTransform transform, double start, double broadening, bool fitBroadening)
+    private VelocityFit Fit(TemplateTransform transform, double start, double reach, double broadening, bool fitBroadening)
     {
-        VelocityFit fit = VelocityFit.Run(_residual, transform.Profile, start, broadening, fitBroadening);
+        VelocityFit fit = VelocityFit.Run(_residual, transform.Profile, start, reach, broadening, fitBroadening);
 
         // Windows are cut for the width at the start: cut them anew where it was far too small or too large.
         if (fit.Converged && fitBroadening && (fit.Broadening > 2.0 * broadening + 20.0 || fit.Broadening < 0.3 * broadening))
         {
-            fit = VelocityFit.Run(_residual, transform.Profile, fit.LogShift, fit.Broadening, fitBroadening);
+            fit = VelocityFit.Run(_residual, transform.Profile, fit.LogShift, reach, fit.Broadening, fitBroadening);
         }
 
         return fit;
@@ -169,12 +193,15 @@ internal sealed class VelocityRun
     private double Threshold(SearchPeak peak)
     {
         double chances = Math.Max(1.0, 2.0 * _search.Grid.MaximumLag / Math.Max(double.IsNaN(peak.Width) ? 2.0 : peak.Width, 1.0));
-        return Normal.InvCDF(0.0, 1.0, 1.0 - (_options.FalseAlarmProbability / chances));
+        double sigmas = Normal.InvCDF(0.0, 1.0, 1.0 - (_options.FalseAlarmProbability / chances));
+        return double.IsNaN(peak.Width) ? UnboundedFactor * sigmas : sigmas;
     }
+
+    private static bool IsFitted(VelocityFit fit) => fit.Converged && fit.Joint.Used > 0 && fit.Joint.Variance > 0.0;
 
     private VelocityResult NoPeak(double[] c, SearchPeak peak)
     {
-        if (peak.AtEnd)
+        if (peak.AtEnd && peak.Significance > Threshold(peak))
         {
             _remarks.Add(new Remark(
                 "edge-of-range", "The correlation is highest at an end of the range searched: search a wider range."));
@@ -192,12 +219,10 @@ internal sealed class VelocityRun
         return new VelocityResult(measurement, Velocities(c.Length), c) { Significance = peak.Significance };
     }
 
-    private VelocityResult Summarize(double[] c, SearchPeak peak, VelocityFit fit, TemplateTransform transform)
+    private VelocityResult Summarize(double[] c, SearchPeak peak, VelocityFit fit)
     {
         double peakKmPerS = Velocity(peak.Lag * _search.Grid.LogStep);
-        bool moved = Math.Abs(fit.LogShift - (peak.Lag * _search.Grid.LogStep))
-            > (0.5 * Math.Max(peak.Width, 2.0) * _search.Grid.LogStep) + (5.0 * Math.Sqrt(fit.Joint.Variance));
-        bool fitted = fit.Converged && fit.Joint.Used > 0 && fit.Joint.Variance > 0.0 && !moved;
+        bool fitted = IsFitted(fit);
         double shift = fitted ? fit.LogShift : peak.Lag * _search.Grid.LogStep;
         double sigma = fitted
             ? Math.Sqrt(fit.Joint.Variance)
@@ -219,6 +244,7 @@ internal sealed class VelocityRun
             Status = reduced ? VelocityStatus.Measured : VelocityStatus.Topocentric,
             VelocityKmPerS = reduced ? observed : Measured.None,
             TopocentricKmPerS = reduced ? double.NaN : velocity,
+            TopocentricUncertaintyKmPerS = reduced ? double.NaN : observed.Uncertainty,
             BarycentricCorrectionKmPerS = reduced ? _spectrum.Metadata.AppliedCorrectionKmPerS ?? double.NaN : double.NaN,
             PeakHeight = peak.Height,
             PeakFwhmKmPerS = peak.Width * _stepKmPerS,
