@@ -10,7 +10,7 @@ namespace StarLines.Velocities;
 /// velocity, and the width where the template does not know it, are common. The windows are then joined as measurements of their
 /// own, so that what does not belong is found and scatter beyond the noise is in the error.
 /// </summary>
-internal sealed class VelocityFit
+internal sealed partial class VelocityFit
 {
     private const int MaximumIterations = 15;
 
@@ -49,7 +49,6 @@ internal sealed class VelocityFit
     private readonly double _reach;
     private double _depthMean;
     private double _depthSigma;
-    private double _pooledInflation = 1.0;
 
     private VelocityFit(
         ResidualSpectrum spectrum, TemplateProfile profile, double logShift, double reach, double broadening, bool fitBroadening)
@@ -234,109 +233,6 @@ internal sealed class VelocityFit
         }
     }
 
-    /// <summary>
-    /// First depths: of each window by least squares, then their mean and scatter, between which the fit is drawn where
-    /// a window alone says little.
-    /// </summary>
-    private bool Start()
-    {
-        double sum = 0.0;
-        double total = 0.0;
-        for (int g = 0; g < _windows.Length; g++)
-        {
-            (double projection, double squares) = Project(g);
-            _states[g].Fate = Covered(g) ? WindowFate.Used : WindowFate.Masked;
-            _states[g].Depth = squares > 0.0 ? projection / squares : 0.0;
-            _states[g].Information = squares;
-            if (_states[g].Fate == WindowFate.Used)
-            {
-                sum += projection;
-                total += squares;
-            }
-        }
-
-        _depthMean = total > 0.0 ? sum / total : 0.0;
-        if (!(_depthMean > 0.0))
-        {
-            return false;
-        }
-
-        _depthSigma = DepthScatter();
-        for (int g = 0; g < _states.Length; g++)
-        {
-            MarkEmission(ref _states[g]);
-            double precision = 1.0 / (_depthSigma * _depthSigma);
-            _states[g].Depth = ((_states[g].Depth * _states[g].Information) + (_depthMean * precision)) / (_states[g].Information + precision);
-        }
-
-        return true;
-    }
-
-    /// <summary>Standard deviation of the depths beyond their noise, between a tenth of the mean and all of it.</summary>
-    private double DepthScatter()
-    {
-        double squares = 0.0;
-        double noise = 0.0;
-        int n = 0;
-        foreach (ref readonly WindowState state in _states.AsSpan())
-        {
-            if (state.Fate == WindowFate.Used && state.Information > 0.0)
-            {
-                double offset = Math.Clamp(state.Depth - _depthMean, -2.0 * _depthMean, 2.0 * _depthMean);
-                double weight = 1.0 / (1.0 + (1.0 / (state.Information * _depthMean * _depthMean)));
-                squares += weight * offset * offset;
-                noise += weight * Math.Min(1.0 / state.Information, 4.0 * _depthMean * _depthMean);
-                n++;
-            }
-        }
-
-        double scatter = n > 1 ? Math.Sqrt(Math.Max(squares - noise, 0.0) / n) : _depthMean;
-        return Math.Clamp(scatter, 0.1 * _depthMean, _depthMean);
-    }
-
-    private static void MarkEmission(ref WindowState state)
-    {
-        if (state.Fate == WindowFate.Used && state.Information > 0.0 && state.Depth * Math.Sqrt(state.Information) < -3.0)
-        {
-            state.Fate = WindowFate.Emission;
-        }
-    }
-
-    private (double Projection, double Squares) Project(int g)
-    {
-        double projection = 0.0;
-        double squares = 0.0;
-        int end = _place[g] + _windows[g].Length;
-        for (int i = _place[g]; i < end; i++)
-        {
-            double weighted = Weight[i] * Template[i];
-            projection += weighted * Absorption[i];
-            squares += weighted * Template[i];
-        }
-
-        return (projection, squares);
-    }
-
-    /// <summary>Whether the slopes of the template, which carry the velocity, lie on good pixels for the most part, on both sides.</summary>
-    private bool Covered(int g)
-    {
-        Span<double> all = stackalloc double[2];
-        Span<double> good = stackalloc double[2];
-        all.Clear();
-        good.Clear();
-        int end = _place[g] + _windows[g].Length;
-        for (int i = _place[g]; i < end; i++)
-        {
-            int side = ByShift[i] < 0.0 ? 0 : 1;
-            double slope = ByShift[i] * ByShift[i];
-            all[side] += slope;
-            good[side] += Weight[i] > 0.0 ? slope : 0.0;
-        }
-
-        // A line cut by the end of the spectrum has one side only.
-        return good[0] > LeastCoverage * Math.Max(all[0], 0.5 * all[1]) && good[1] > LeastCoverage * Math.Max(all[1], 0.5 * all[0]);
-    }
-
     /// <summary>One pass over the windows; returns the step of the broadening.</summary>
     private double SolveWindows()
     {
@@ -391,68 +287,27 @@ internal sealed class VelocityFit
         {
             if (state.Fate == WindowFate.Used)
             {
-                chi += state.ChiSquare;
-                freedom += Math.Max(state.Pixels - 2, 0);
+                chi += OwnChiSquare(state);
+                freedom += Math.Max(state.Pixels - 3, 0);
             }
         }
 
-        _pooledInflation = freedom > 0.0 ? Excess(chi, freedom) : 1.0;
+        double pooled = freedom > 0.0 ? Excess(chi, freedom) : 1.0;
         foreach (ref WindowState state in _states.AsSpan())
         {
-            double own = state.Pixels > 4 ? Excess(state.ChiSquare, state.Pixels - 2) : 1.0;
-            state.Inflation = Math.Max(own, Math.Min(_pooledInflation, Math.Max(state.ChiSquare / Math.Max(state.Pixels - 2, 1), 1.0)));
+            double chiSquare = OwnChiSquare(state);
+            double own = state.Pixels > 4 ? Excess(chiSquare, state.Pixels - 3) : 1.0;
+            state.Inflation = Math.Max(own, Math.Min(pooled, Math.Max(chiSquare / Math.Max(state.Pixels - 3, 1), 1.0)));
         }
     }
+
+    /// <summary>χ² of a window at its own velocity: a line at the wrong place is not one of the wrong shape.</summary>
+    private static double OwnChiSquare(in WindowState state) =>
+        Math.Max(state.ChiSquare - (state.Step * state.Step * state.Information), 0.0);
 
     /// <summary>χ² over its degrees of freedom, less three standard deviations of that; at least 1.</summary>
     private static double Excess(double chiSquare, double freedom) =>
         Math.Max(1.0, (chiSquare / freedom) - (3.0 * Math.Sqrt(2.0 / freedom)));
-
-    /// <summary>Leaves out single pixels far off, such as cosmic-ray hits, in windows that do not fit.</summary>
-    private void ClipPixels()
-    {
-        for (int g = 0; g < _windows.Length; g++)
-        {
-            ref WindowState state = ref _states[g];
-            if (state.Fate != WindowFate.Used || state.Pixels < 8 || state.ChiSquare < state.Pixels + (4.0 * Math.Sqrt(2.0 * state.Pixels)))
-            {
-                continue;
-            }
-
-            int place = _place[g];
-            int length = _windows[g].Length;
-            Span<double> size = Work.Slice(place, length);
-            var sorted = new double[length];
-            int n = 0;
-            double centre = 0.5 * (length - 1);
-            for (int i = 0; i < length; i++)
-            {
-                double flux = 1.0 - (state.Depth * Template[place + i]);
-                double shape = state.Level + (state.Tilt * (i - centre) / Math.Max(centre, 1.0));
-                size[i] = Math.Abs(Absorption[place + i] - (state.Depth * Template[place + i]) + (shape * flux))
-                    * Math.Sqrt(Weight[place + i]);
-                if (Weight[place + i] > 0.0)
-                {
-                    sorted[n++] = size[i];
-                }
-            }
-
-            Array.Sort(sorted, 0, n);
-            double limit = PixelCut * Math.Max(1.0, 1.4826 * sorted[n / 2]);
-            for (int i = 0; i < length; i++)
-            {
-                if (size[i] > limit)
-                {
-                    Weight[place + i] = 0.0;
-                }
-            }
-
-            if (!Covered(g))
-            {
-                state.Fate = WindowFate.Masked;
-            }
-        }
-    }
 
     /// <summary>No step is longer than a good part of a line width, where the linear model ends.</summary>
     private double LongestStep()
