@@ -1,4 +1,5 @@
 using System;
+using System.Diagnostics;
 
 namespace StarLines.Continuum;
 
@@ -16,14 +17,24 @@ public sealed class ContinuumFit
     /// <param name="stiffnessAngstrom">The length over which the continuum may bend, Å.</param>
     public ContinuumFit(
         ReadOnlySpan<double> level, ReadOnlySpan<double> sigma, ReadOnlySpan<bool> trusted, double stiffnessAngstrom)
+        : this(level.ToArray(), sigma.ToArray(), trusted.ToArray(), stiffnessAngstrom, takeOwnership: true)
     {
+    }
+
+    /// <summary>Makes a continuum of arrays that the caller just allocated and gives up.</summary>
+    internal ContinuumFit(double[] level, double[] sigma, bool[] trusted, double stiffnessAngstrom, bool takeOwnership)
+    {
+        Debug.Assert(takeOwnership, "Only arrays just allocated may be handed over.");
         Guard.SameLength(sigma.Length, level.Length, nameof(sigma));
         Guard.SameLength(trusted.Length, level.Length, nameof(trusted));
-        _level = level.ToArray();
-        _sigma = sigma.ToArray();
-        _trusted = trusted.ToArray();
+        _level = level;
+        _sigma = sigma;
+        _trusted = trusted;
         StiffnessAngstrom = stiffnessAngstrom;
     }
+
+    /// <summary>What the fit learned of the noise, for a refinement; null where the continuum was not fitted.</summary>
+    internal ContinuumNoise? Noise { get; init; }
 
     /// <summary>Number of pixels.</summary>
     public int Count => _level.Length;

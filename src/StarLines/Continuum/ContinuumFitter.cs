@@ -33,9 +33,10 @@ public static class ContinuumFitter
 
     // While the stiffness is chosen this many pixels are enough.
     private const int SearchPixels = 2500;
-    private const int FirstSteps = 10;
+    private const int FirstSteps = 9;
+    private const int PlainSteps = 3;
     private const int StepsPerCandidate = 3;
-    private const int MostFinalSteps = 12;
+    private const int MostFinalSteps = 5;
 
     // The level has settled when a step moves it by less than this part of its own uncertainty.
     private const double Settled = 0.05;
@@ -87,12 +88,10 @@ public static class ContinuumFitter
         }
 
         data.SetLevel(previous, spectrum.Scale);
-        ContinuumData thin = data.Thinned(Math.Max(1, data.Count / SearchPixels));
-        var noise = new ContinuumNoise(thin.Count, ContinuumNoise.BlocksFor(data.Count), 1.0);
-        Iterate(thin, noise, previous.StiffnessAngstrom, FirstSteps, learn: true);
-        ContinuumNoise fullNoise = noise.ForPixels(data.Count);
-        ContinuumIteration final = Finish(data, fullNoise, previous.StiffnessAngstrom);
-        return ContinuumResult.Make(spectrum, data, fullNoise, final.Spline, previous.StiffnessAngstrom);
+        ContinuumNoise noise = previous.Noise?.ForPixels(data.Count)
+            ?? new ContinuumNoise(data.Count, ContinuumNoise.BlocksFor(data.Count), 1.0);
+        ContinuumIteration final = Finish(data, noise, previous.StiffnessAngstrom);
+        return ContinuumResult.Make(spectrum, data, noise, final.Spline, previous.StiffnessAngstrom);
     }
 
     private static ContinuumData? Data(Spectrum spectrum, ReadOnlySpan<double> lineModel)
@@ -203,7 +202,7 @@ public static class ContinuumFitter
         var iteration = new ContinuumIteration(data, noise, stiffness);
         for (int step = 0; step < steps; step++)
         {
-            iteration.Step(learn);
+            iteration.Step(learn, relax: learn && step >= PlainSteps && step < steps - 1);
         }
 
         return iteration;
@@ -216,6 +215,7 @@ public static class ContinuumFitter
         var scratch = new double[iteration.Spline.Coefficients.Length];
         for (int step = 0; step < MostFinalSteps; step++)
         {
+            iteration.Step(learn: true, relax: true);
             data.Level.CopyTo(before, 0);
             iteration.Step(learn: true);
             double middle = data.X[data.Count / 2];

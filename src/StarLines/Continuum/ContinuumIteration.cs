@@ -12,6 +12,9 @@ internal sealed class ContinuumIteration
     private const double LeastNoiseScale = 0.25;
     private const double LargestNoiseScale = 1e6;
 
+    // A step is not lengthened to more than twice itself.
+    private const double LeastInformation = 0.5;
+
     // What a pixel that is no continuum has for density, in units of the typical level.
     private const double Background = 0.1;
 
@@ -41,7 +44,11 @@ internal sealed class ContinuumIteration
 
     /// <summary>One step: weights from the present level, and a new level from the weights.</summary>
     /// <param name="learn">Whether the noise model is learned too.</param>
-    internal void Step(bool learn)
+    /// <param name="relax">
+    /// Whether the step is lengthened by the information that an expectation step does not see, which makes it nearly a
+    /// Newton step; the level is then ahead of the spline.
+    /// </param>
+    internal void Step(bool learn, bool relax = false)
     {
         _spline.Clear();
         _noise.BeginStep();
@@ -66,7 +73,7 @@ internal sealed class ContinuumIteration
             }
         }
 
-        Solve(total);
+        Solve(total, relax ? 1.0 / Math.Max(LeastInformation, _noise.Information) : 1.0);
         if (learn)
         {
             _noise.EndStep(LeastNoiseScale, LargestNoiseScale);
@@ -120,43 +127,35 @@ internal sealed class ContinuumIteration
     private double AddPixels(int start, int stop, int interval, int block)
     {
         ContinuumMixture mixture = _noise.Mixture(block);
-        double inverseScale = 1.0 / _noise.Scale;
-        double shift = mixture.Shift;
-        double raise = shift * _noise.Scale;
-        double left = _spline.First + (interval * _spline.KnotStep);
-        double perStep = 1.0 / _spline.KnotStep;
+        var frame = new KernelFrame(
+            mixture.Core,
+            mixture.Below,
+            mixture.Above,
+            mixture.Shift,
+            1.0 / _noise.Scale,
+            _spline.First + (interval * _spline.KnotStep),
+            1.0 / _spline.KnotStep);
         var moments = default(SplineMoments);
         var counts = default(MixtureCounts);
-        ReadOnlySpan<double> x = _data.X.AsSpan(start, stop - start);
-        ReadOnlySpan<double> flux = _data.Flux.AsSpan(start, stop - start);
-        ReadOnlySpan<double> inverseSigma = _data.InverseSigma.AsSpan(start, stop - start);
-        ReadOnlySpan<double> level = _data.Level.AsSpan(start, stop - start);
-        for (int i = 0; i < x.Length; i++)
-        {
-            double w = inverseSigma[i];
-            double r = (flux[i] - level[i]) * w * inverseScale;
-            if (!(w > 0.0) || !(Math.Abs(r) < ContinuumMixture.Reach))
-            {
-                continue;
-            }
-
-            double p = mixture.Probability(r, out double absorbed);
-            counts.Add(r, shift, p, absorbed);
-            double ws = w * inverseScale;
-            moments.Add((x[i] - left) * perStep, p * ws * ws, flux[i] + (raise / w));
-        }
-
+        MixtureKernel.Add(
+            _data.X.AsSpan(start, stop - start),
+            _data.Flux.AsSpan(start, stop - start),
+            _data.InverseSigma.AsSpan(start, stop - start),
+            _data.Level.AsSpan(start, stop - start),
+            frame,
+            ref moments,
+            ref counts);
         _noise.Count(block, counts);
         _spline.Add(interval, moments);
         return moments.W0;
     }
 
-    private void Solve(double total)
+    private void Solve(double total, double length)
     {
         double range = _spline.KnotStep * _spline.Intervals;
         double perAngstrom = total / range;
         double penalty = perAngstrom * Math.Pow(_stiffness / (2.0 * Math.PI), 6.0) / Math.Pow(_spline.KnotStep, 5.0);
         _spline.Solve(penalty);
-        _spline.Evaluate(_data.X, _ends, _data.Level);
+        _spline.Evaluate(_data.X, _ends, _data.Level, length);
     }
 }

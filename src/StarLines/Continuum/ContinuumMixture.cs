@@ -17,10 +17,6 @@ internal sealed class ContinuumMixture
     /// <summary>Residuals beyond this are not continuum, and the tails are counted up to here.</summary>
     internal const double Reach = 5.0;
 
-    private const int PerUnit = 32;
-    private const double TableReach = 6.0;
-    private const int TableLength = (int)(2 * TableReach * PerUnit) + 2;
-
     // A crowded spectrum keeps this much continuum, or the level would float above all data.
     private const double LeastCore = 0.08;
     private const double LargestShift = 0.6;
@@ -28,9 +24,6 @@ internal sealed class ContinuumMixture
 
     // A block is told what the whole spectrum is like with the weight of this many pixels.
     private const double PriorPixels = 60.0;
-
-    private static readonly double[] s_phi = MakePhi();
-    private static readonly double[] s_upper = MakeUpper();
 
     /// <summary>A mixture to begin with: some absorption, little emission.</summary>
     internal ContinuumMixture()
@@ -50,31 +43,15 @@ internal sealed class ContinuumMixture
     /// <summary>κ = (ρ₋ − ρ₊)/w, in units of the noise.</summary>
     internal double Shift => Math.Clamp((Below - Above) / Core, -LargestShift, LargestShift);
 
-    /// <summary>The probabilities that a residual belongs to a continuum pixel, and to an absorbed one.</summary>
-    /// <param name="r">Residual in units of the noise, within ±<see cref="Reach"/>.</param>
-    /// <param name="absorbed">Receives the probability of being absorbed.</param>
-    internal double Probability(double r, out double absorbed)
-    {
-        double position = (r + TableReach) * PerUnit;
-        int i = (int)position;
-        double part = position - i;
-        double phi = s_phi[i] + (part * (s_phi[i + 1] - s_phi[i]));
-        double upper = s_upper[i] + (part * (s_upper[i + 1] - s_upper[i]));
-        double core = Core * phi;
-        double below = Below * (1.0 - upper);
-        double inverse = 1.0 / (core + below + (Above * upper));
-        absorbed = below * inverse;
-        return core * inverse;
-    }
+    /// <summary>A mixture of its own with the same numbers.</summary>
+    internal ContinuumMixture Copy() => (ContinuumMixture)MemberwiseClone();
 
-    /// <summary>ln p(r), with the tails held constant beyond the table.</summary>
-    internal double LogDensity(double r)
-    {
-        double position = Math.Clamp((r + TableReach) * PerUnit, 0.0, TableLength - 1);
-        int i = (int)position;
-        double upper = s_upper[i];
-        return Math.Log((Core * s_phi[i]) + (Below * (1.0 - upper)) + (Above * upper));
-    }
+    /// <summary>The probability that a residual belongs to a continuum pixel; 0 beyond the reach.</summary>
+    internal double Probability(double r) =>
+        Math.Abs(r) < Reach ? Core * NormalDensity(r) / Density(r) : 0.0;
+
+    /// <summary>ln p(r), with the tails held constant beyond the reach.</summary>
+    internal double LogDensity(double r) => Math.Log(Density(Math.Clamp(r, -Reach - 1.0, Reach + 1.0)));
 
     /// <summary>Learns the three numbers from the sums of an expectation step.</summary>
     /// <param name="counts">The sums.</param>
@@ -101,27 +78,11 @@ internal sealed class ContinuumMixture
         Above = Math.Max(above, LeastDensity);
     }
 
-    private static double[] MakePhi()
+    private static double NormalDensity(double r) => Math.Exp(-0.5 * r * r) / Math.Sqrt(2.0 * Math.PI);
+
+    private double Density(double r)
     {
-        var table = new double[TableLength];
-        for (int i = 0; i < TableLength; i++)
-        {
-            double r = (i / (double)PerUnit) - TableReach;
-            table[i] = Math.Exp(-0.5 * r * r) / Math.Sqrt(2.0 * Math.PI);
-        }
-
-        return table;
-    }
-
-    private static double[] MakeUpper()
-    {
-        var table = new double[TableLength];
-        for (int i = 0; i < TableLength; i++)
-        {
-            double r = (i / (double)PerUnit) - TableReach;
-            table[i] = 0.5 * MathNet.Numerics.SpecialFunctions.Erfc(-r / Math.Sqrt(2.0));
-        }
-
-        return table;
+        double upper = 1.0 / (1.0 + Math.Exp(-r * (MixtureKernel.StepLinear + (MixtureKernel.StepCubic * r * r))));
+        return (Core * NormalDensity(r)) + (Below * (1.0 - upper)) + (Above * upper);
     }
 }

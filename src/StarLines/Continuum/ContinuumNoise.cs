@@ -48,7 +48,11 @@ internal sealed class ContinuumNoise
     internal ContinuumNoise ForPixels(int pixels)
     {
         var other = new ContinuumNoise(pixels, Blocks, Scale);
-        _mixtures.CopyTo(other._mixtures, 0);
+        for (int b = 0; b < Blocks; b++)
+        {
+            other._mixtures[b] = _mixtures[b].Copy();
+        }
+
         return other;
     }
 

@@ -5,9 +5,9 @@ namespace StarLines.Continuum;
 /// <summary>Turns a fitted spline into levels, uncertainties and trust for every pixel.</summary>
 internal static class ContinuumResult
 {
-    // The level is trusted where at least this part of the pixels within a quarter of the stiffness is continuum.
+    // The level is trusted where at least this part of the pixels of a knot interval is continuum.
     private const double LeastSupport = 0.1;
-    private const int CellsPerStiffness = 4;
+    private const int SupportPixels = 8000;
 
     internal static ContinuumFit Make(
         Spectrum spectrum, ContinuumData data, ContinuumNoise noise, PenalizedSpline spline, double stiffness)
@@ -17,63 +17,67 @@ internal static class ContinuumResult
         var sigma = new double[count];
         var trusted = new bool[count];
         ReadOnlySpan<double> wavelengths = spectrum.Scale.WavelengthsAngstrom;
-        double[] nodes = VarianceAtKnots(spline);
-        double[] support = Support(data, noise, spline.First, stiffness);
-        double inflation = data.Unit * Math.Sqrt(1.0 / noise.Information);
-        double last = spline.First + (spline.KnotStep * spline.Intervals);
-        for (int i = 0; i < count; i++)
+        int[] ends = spline.IntervalEnds(wavelengths);
+        spline.Evaluate(wavelengths, ends, level);
+        double[] nodes = SigmaAtKnots(spline, data.Unit * Math.Sqrt(1.0 / noise.Information));
+        bool[] support = Support(data, noise, spline);
+        int i = 0;
+        for (int k = 0; k < ends.Length; k++)
         {
-            double x = Math.Clamp(wavelengths[i], spline.First, last);
-            level[i] = data.Unit * spline.Evaluate(x);
-            double position = (x - spline.First) / spline.KnotStep;
-            int k = Math.Min((int)position, spline.Intervals - 1);
-            double variance = nodes[k] + ((position - k) * (nodes[k + 1] - nodes[k]));
-            sigma[i] = inflation * Math.Sqrt(Math.Max(0.0, variance));
-            int cell = Math.Clamp((int)((x - spline.First) / stiffness * CellsPerStiffness), 0, support.Length - 1);
-            trusted[i] = support[cell] >= LeastSupport && level[i] > 0.0;
+            double left = spline.First + (k * spline.KnotStep);
+            double slope = (nodes[k + 1] - nodes[k]) / spline.KnotStep;
+            for (; i < ends[k]; i++)
+            {
+                // Beyond the good pixels the level is held, and so is its uncertainty.
+                double x = Math.Clamp(wavelengths[i] - left, 0.0, spline.KnotStep);
+                level[i] *= data.Unit;
+                sigma[i] = nodes[k] + (x * slope);
+                trusted[i] = support[k] && level[i] > 0.0;
+            }
         }
 
-        return new ContinuumFit(level, sigma, trusted, stiffness);
+        return new ContinuumFit(level, sigma, trusted, stiffness, takeOwnership: true) { Noise = noise };
     }
 
-    private static double[] VarianceAtKnots(PenalizedSpline spline)
+    private static double[] SigmaAtKnots(PenalizedSpline spline, double factor)
     {
         var nodes = new double[spline.Intervals + 1];
         var scratch = new double[spline.Coefficients.Length];
         for (int k = 0; k < nodes.Length; k++)
         {
-            nodes[k] = spline.Variance(spline.First + (k * spline.KnotStep), scratch);
+            double variance = spline.Variance(spline.First + (k * spline.KnotStep), scratch);
+            nodes[k] = factor * Math.Sqrt(Math.Max(0.0, variance));
         }
 
         return nodes;
     }
 
-    private static double[] Support(ContinuumData data, ContinuumNoise noise, double first, double stiffness)
+    private static bool[] Support(ContinuumData data, ContinuumNoise noise, PenalizedSpline spline)
     {
-        double range = data.X[^1] - first;
-        int cells = Math.Max(1, (int)Math.Ceiling(range / stiffness * CellsPerStiffness));
-        var core = new double[cells];
-        var total = new double[cells];
+        // A sample of the pixels tells as well as all of them.
+        int stride = Math.Max(1, data.Count / SupportPixels);
+        var core = new double[spline.Intervals];
+        var total = new double[spline.Intervals];
         double inverseScale = 1.0 / noise.Scale;
         for (int block = 0; block < noise.Blocks; block++)
         {
             ContinuumMixture mixture = noise.Mixture(block);
             (int start, int end) = noise.PixelsOf(block);
-            for (int i = start; i < end; i++)
+            for (int i = start; i < end; i += stride)
             {
-                int cell = Math.Clamp((int)((data.X[i] - first) / stiffness * CellsPerStiffness), 0, cells - 1);
-                double w = data.InverseSigma[i];
-                total[cell] += 1.0;
-                double r = (data.Flux[i] - data.Level[i]) * w * inverseScale;
-                core[cell] += w > 0.0 && Math.Abs(r) < ContinuumMixture.Reach ? mixture.Probability(r, out _) : 0.0;
+                int interval = spline.Locate(data.X[i], out _);
+                double r = (data.Flux[i] - data.Level[i]) * data.InverseSigma[i] * inverseScale;
+                total[interval] += 1.0;
+                core[interval] += data.InverseSigma[i] > 0.0 ? mixture.Probability(r) : 0.0;
             }
         }
 
-        for (int k = 0; k < cells; k++)
+        var support = new bool[spline.Intervals];
+        for (int k = 0; k < support.Length; k++)
         {
-            core[k] = total[k] > 0.0 ? core[k] / total[k] : 0.0;
+            support[k] = core[k] >= LeastSupport * Math.Max(1.0, total[k]);
         }
 
-        return core;
+        return support;
     }
 }

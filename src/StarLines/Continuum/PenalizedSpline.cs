@@ -114,8 +114,9 @@ internal sealed class PenalizedSpline
     /// <summary>The spline at many abscissae.</summary>
     /// <param name="x">Abscissae in rising order.</param>
     /// <param name="ends">Their <see cref="IntervalEnds"/>.</param>
-    /// <param name="destination">As many values.</param>
-    internal void Evaluate(ReadOnlySpan<double> x, ReadOnlySpan<int> ends, Span<double> destination)
+    /// <param name="destination">As many values, which move towards the spline.</param>
+    /// <param name="length">How far they move: 1 all the way, more beyond it.</param>
+    internal void Evaluate(ReadOnlySpan<double> x, ReadOnlySpan<int> ends, Span<double> destination, double length = 1.0)
     {
         int i = 0;
         double perStep = 1.0 / KnotStep;
@@ -130,7 +131,8 @@ internal sealed class PenalizedSpline
             for (; i < ends[interval]; i++)
             {
                 double t = (x[i] - left) * perStep;
-                destination[i] = p0 + (t * (p1 + (t * (p2 + (t * p3)))));
+                double value = p0 + (t * (p1 + (t * (p2 + (t * p3)))));
+                destination[i] = (length * value) + ((1.0 - length) * destination[i]);
             }
         }
     }
