@@ -70,14 +70,26 @@ internal sealed class TemplateTransform
     /// <summary>Mean full width at half maximum of the template's lines, km/s: that of its autocorrelation over √2.</summary>
     internal double FwhmKmPerS { get; }
 
+    /// <summary>
+    /// The correlation of the template, widened or not, with a star of the same lines at lag 0: lags 0 to count − 1, 1 at lag 0.
+    /// </summary>
+    internal double[] Autocorrelation(int count, double broadening)
+    {
+        double sigma = Math.Sqrt(broadening) / (PhysicalConstants.SpeedOfLightKmPerS * Grid.LogStep);
+        double exponent = 2.0 * Math.PI * sigma / Grid.Fft.Size;
+        return Autocorrelation(count, k => Math.Exp(-exponent * exponent * k * k));
+    }
+
     /// <summary>The correlation of the template with itself, lags from 0 up, without mean, 1 at lag 0.</summary>
-    internal double[] Autocorrelation(int count)
+    internal double[] Autocorrelation(int count) => Autocorrelation(count, static _ => 1.0);
+
+    private double[] Autocorrelation(int count, Func<double, double> power)
     {
         var re = new double[Grid.Fft.Bins];
         var c = new double[Grid.Fft.Size];
         for (int k = 1; k < re.Length; k++)
         {
-            re[k] = (Re[k] * Re[k]) + (Im[k] * Im[k]);
+            re[k] = power(k) * ((Re[k] * Re[k]) + (Im[k] * Im[k]));
         }
 
         Grid.Fft.Inverse(re, new double[re.Length], c, new double[2 * Grid.Fft.Size]);

@@ -44,6 +44,17 @@ internal sealed class ResidualSpectrum
         CapWeights();
     }
 
+    private ResidualSpectrum(ResidualSpectrum other, double[] absorption)
+    {
+        _vacuum = other._vacuum;
+        Assumed = other.Assumed;
+        Absorption = absorption;
+        Weight = other.Weight;
+        ContinuumSigma = other.ContinuumSigma;
+        StiffnessAngstrom = other.StiffnessAngstrom;
+        Used = other.Used;
+    }
+
     /// <summary>What wavelengths of unknown medium were taken for.</summary>
     internal Medium Assumed { get; }
 
@@ -80,6 +91,15 @@ internal sealed class ResidualSpectrum
             return Count < 2 ? double.NaN
                 : PhysicalConstants.SpeedOfLightKmPerS * Math.Log(_vacuum[Math.Max(middle, 1)] / _vacuum[Math.Max(middle, 1) - 1]);
         }
+    }
+
+    /// <summary>The spectrum with a fitted star taken away.</summary>
+    internal ResidualSpectrum Without(VelocityFit fit)
+    {
+        var absorption = new double[Count];
+        fit.AddModel(_vacuum, absorption);
+        System.Numerics.Tensors.TensorPrimitives.Subtract(Absorption, absorption, absorption);
+        return new ResidualSpectrum(this, absorption);
     }
 
     /// <summary>The grid for this spectrum.</summary>

@@ -79,6 +79,29 @@ internal readonly record struct SearchPeak
         };
     }
 
+    /// <summary>The peak of a second star, taken from the correlation without the first.</summary>
+    /// <param name="c">Correlation without the first star, lag 0 in the middle.</param>
+    /// <param name="index">Index of the maximum.</param>
+    /// <param name="pixels">Number of pixels that went into it.</param>
+    /// <param name="significance">Height in standard deviations.</param>
+    internal static SearchPeak At(ReadOnlySpan<double> c, int index, int pixels, double significance)
+    {
+        (double place, double height, double curvature) = CorrelationPeak.Parabola(c, index);
+        double width = CorrelationPeak.WidthAt(c, index, 0.5 * height);
+        double ratio = CorrelationPeak.Ratio(height, CorrelationPeak.AntisymmetricSigma(c, place, periodic: false));
+        return new SearchPeak
+        {
+            Index = index,
+            Lag = place - (c.Length / 2),
+            Height = height,
+            Width = width,
+            ZuckerError = CorrelationPeak.ZuckerError(pixels, height, curvature),
+            Ratio = ratio,
+            TonryDavisError = CorrelationPeak.TonryDavisError(width, ratio),
+            Significance = significance,
+        };
+    }
+
     /// <summary>
     /// Height over noise: by the number of pixels, √(N/(1 − c²)), and where the range is long against the peak also by the
     /// scatter of the correlation away from it, which knows of correlated noise and of lines that do not belong.

@@ -1,4 +1,5 @@
 using System;
+using StarLines.Templates;
 
 namespace StarLines.Velocities;
 
@@ -106,5 +107,36 @@ internal sealed partial class VelocityFit
 
         // A line cut by the end of the spectrum has one side only.
         return good[0] > LeastCoverage * Math.Max(all[0], 0.5 * all[1]) && good[1] > LeastCoverage * Math.Max(all[1], 0.5 * all[0]);
+    }
+
+    /// <summary>Adds the absorption of the fitted star to an array over the whole spectrum.</summary>
+    internal void AddModel(ReadOnlySpan<double> vacuumAngstrom, Span<double> model)
+    {
+        int longest = 0;
+        foreach (TemplateWindow window in _windows)
+        {
+            longest = Math.Max(longest, window.Length);
+        }
+
+        var memory = new double[4 * longest];
+        for (int g = 0; g < _windows.Length; g++)
+        {
+            TemplateWindow window = _windows[g];
+            int n = window.Length;
+            Span<double> template = memory.AsSpan(0, n);
+            _profile.Evaluate(
+                vacuumAngstrom.Slice(window.Start, n),
+                LogShift,
+                Broadening,
+                template,
+                memory.AsSpan(longest, n),
+                memory.AsSpan(2 * longest, n),
+                memory.AsSpan(3 * longest, n));
+            double depth = _states[g].Fate == WindowFate.Used ? _states[g].Depth : _depthMean;
+            for (int i = 0; i < n; i++)
+            {
+                model[window.Start + i] += depth * template[i];
+            }
+        }
     }
 }

@@ -77,7 +77,22 @@ internal sealed class VelocityRun
         VelocityFit fit = Fit(transform, start, Reach(peak), StartingWidth(peak, transform, narrowest), !_template.WidthsKnown || wider);
 
         // Neither a fit nor a peak with two sides: nothing that could be given an error.
-        return IsScattered(fit, transform) || (!IsFitted(fit) && double.IsNaN(peak.Width)) ? NoPeak(c, peak) : Summarize(c, peak, fit);
+        if (IsScattered(fit, transform) || (!IsFitted(fit) && double.IsNaN(peak.Width)))
+        {
+            return NoPeak(c, peak);
+        }
+
+        SecondStar? pair = _options.SecondComponent && IsFitted(fit)
+            ? SecondStar.Find(_residual, transform, c, peak, fit, Reach(peak))
+            : null;
+        if (pair is null)
+        {
+            return Summarize(c, peak, fit, component: 1, components: 1);
+        }
+
+        VelocityResult second = Summarize(c, pair.Peak, pair.SecondFit, component: 2, components: 2);
+        VelocityResult first = Summarize(c, peak, pair.FirstFit, component: 1, components: 2);
+        return first.With(first.Measurement, second);
     }
 
     /// <summary>How far the fit may move from the peak: three quarters of its width, or an eighth of the range where it is wider than that.</summary>
@@ -219,7 +234,7 @@ internal sealed class VelocityRun
         return new VelocityResult(measurement, Velocities(c.Length), c) { Significance = peak.Significance };
     }
 
-    private VelocityResult Summarize(double[] c, SearchPeak peak, VelocityFit fit)
+    private VelocityResult Summarize(double[] c, SearchPeak peak, VelocityFit fit, int component, int components)
     {
         double peakKmPerS = Velocity(peak.Lag * _search.Grid.LogStep);
         bool fitted = IsFitted(fit);
@@ -252,7 +267,9 @@ internal sealed class VelocityRun
             ProjectedRotationKmPerS = fitted ? Rotation(fit) : Measured.None,
             PhotonLimitKmPerS = fitted ? fit.PhotonSigma * perShift : double.NaN,
             Pixels = fitted ? fit.Pixels : _residual.Used,
-            Warnings = _remarks,
+            Components = components,
+            Component = component,
+            Warnings = [.. _remarks],
         };
         return new VelocityResult(measurement, Velocities(c.Length), c)
         {

@@ -39,9 +39,15 @@ internal static class SyntheticStar
         var flux = new double[scale.Count];
         for (int i = 0; i < flux.Length; i++)
         {
-            double x = scale.WavelengthsAngstrom[i];
-            flux[i] = 1.0 - stars.Sum(star => star.Light * list.Lines.Sum(line => Line(line, x, star.VelocityKmPerS, star.ExtraSigmaKmPerS)));
-            flux[i] += Gauss(random) / signalToNoise;
+            flux[i] = 1.0 + (Gauss(random) / signalToNoise);
+        }
+
+        foreach ((double velocity, double light, double extra) in stars)
+        {
+            foreach (RestLine line in list.Lines)
+            {
+                AddLine(line, scale.WavelengthsAngstrom, velocity, light, extra, flux);
+            }
         }
 
         if (medium == Medium.Air)
@@ -59,11 +65,19 @@ internal static class SyntheticStar
     public static double Gauss(Random random) =>
         Math.Sqrt(-2.0 * Math.Log(1.0 - random.NextDouble())) * Math.Cos(2.0 * Math.PI * random.NextDouble());
 
-    private static double Line(RestLine line, double x, double velocity, double extra)
+    private static void AddLine(
+        RestLine line, ReadOnlySpan<double> wavelengths, double velocity, double light, double extra, double[] flux)
     {
         double centre = line.WavelengthAngstrom * Doppler.Factor(velocity);
         double own = line.FwhmAngstrom / PhysicalConstants.FwhmPerSigma;
         double sigma = Math.Sqrt((own * own) + Math.Pow(extra * centre / PhysicalConstants.SpeedOfLightKmPerS, 2.0));
-        return line.Depth * own / sigma * Math.Exp(-0.5 * Math.Pow((x - centre) / sigma, 2.0));
+        for (int i = 0; i < flux.Length; i++)
+        {
+            double u = (wavelengths[i] - centre) / sigma;
+            if (Math.Abs(u) < 9.0)
+            {
+                flux[i] -= light * line.Depth * own / sigma * Math.Exp(-0.5 * u * u);
+            }
+        }
     }
 }

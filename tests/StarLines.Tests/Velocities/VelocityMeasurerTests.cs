@@ -130,4 +130,33 @@ public sealed class VelocityMeasurerTests
         Assert.Equal(30.0, result.Measurement.ProjectedRotationKmPerS.Value, 1.5);
         Assert.Equal(-20.0, result.ObservedKmPerS.Value, 4.0 * result.ObservedKmPerS.Uncertainty);
     }
+
+    [Theory]
+    [InlineData(60.0, 0.4)]
+    [InlineData(-45.0, 0.3)]
+    [InlineData(300.0, 0.25)]
+    public void A_second_star_gets_a_velocity_of_its_own(double velocityKmPerS, double light)
+    {
+        Spectrum spectrum = SyntheticStar.Spectrum(List, 100.0, seed: 7, [(5.0, 1.0 - light, 0.0), (velocityKmPerS, light, 0.0)]);
+        VelocityResult result = VelocityMeasurer.Measure(spectrum, SyntheticStar.Continuum(spectrum), Template);
+        Assert.Equal(2, result.Measurement.Components);
+        Assert.NotNull(result.Second);
+        Assert.Equal(2, result.Second.Measurement.Component);
+        Assert.Equal(5.0, result.ObservedKmPerS.Value, 5.0 * result.ObservedKmPerS.Uncertainty);
+        Assert.Equal(velocityKmPerS, result.Second.ObservedKmPerS.Value, 5.0 * result.Second.ObservedKmPerS.Uncertainty);
+    }
+
+    [Fact]
+    public void No_second_star_is_seen_in_single_spectra()
+    {
+        for (int k = 0; k < 150; k++)
+        {
+            LineList list = SyntheticStar.List(20 + k, seed: k);
+            RestLine[] depths = [.. list.Lines.Select((line, j) => line with { Depth = line.Depth * (0.6 + (0.8 * ((j * 7 % 11) / 10.0))) })];
+            Spectrum spectrum = SyntheticStar.Spectrum(
+                new LineList("star", Medium.Vacuum, depths), 15.0 + (2.0 * k), seed: 400 + k, [(30.0, 1.0, 0.0)]);
+            VelocityResult result = VelocityMeasurer.Measure(spectrum, SyntheticStar.Continuum(spectrum), LineTemplate.FromLineList(list));
+            Assert.Equal(1, result.Measurement.Components);
+        }
+    }
 }
