@@ -33,7 +33,7 @@ internal sealed class Atmosphere
         };
 
     /// <summary>Puts Fe I 6065.48 of a star like the Sun near 110 mÅ.</summary>
-    private const double ColumnLog = -2.9;
+    private const double ColumnLog = -1.75;
 
     /// <summary>Turbulence, km/s.</summary>
     private const double TurbulenceKmPerS = 1.4;

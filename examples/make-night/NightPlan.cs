@@ -13,7 +13,7 @@ internal static class NightPlan
             Name = "wren-12", Target = "Wren 12", SpectralType = "A2 V", Seed = 1201,
             RightAscensionDegrees = 96.2245, DeclinationDegrees = 31.5871,
             StartMinutes = 12.5, ExposureSeconds = 600, SignalToNoise = 140,
-            Stars = [Dwarf(-14.62, 8900, 42.0, 9.0)],
+            Stars = [Dwarf(-14.62, 8900, 42.0, 28.0)],
         },
         new Exposure
         {
@@ -22,8 +22,8 @@ internal static class NightPlan
             StartMinutes = 55.0, ExposureSeconds = 1200, SignalToNoise = 120,
             Stars =
             [
-                Dwarf(62.35, 6350, 9.0, 2.2) with { Share = 0.62 },
-                Dwarf(-51.80, 5950, 6.0, 1.4) with { Share = 0.38 },
+                Dwarf(62.35, 6350, 9.0, 6.0) with { Share = 0.62 },
+                Dwarf(-51.80, 5950, 6.0, 3.0) with { Share = 0.38 },
             ],
         },
         new Exposure
@@ -31,14 +31,14 @@ internal static class NightPlan
             Name = "wren-47", Target = "Wren 47", SpectralType = "G2 V", Seed = 4713,
             RightAscensionDegrees = 141.0718, DeclinationDegrees = 44.2369,
             StartMinutes = 130.0, ExposureSeconds = 1500, SignalToNoise = 130,
-            Stars = [Dwarf(27.44, 5770, 2.5, 1.2)],
+            Stars = [Dwarf(27.44, 5770, 2.5, 2.4)],
         },
         new Exposure
         {
             Name = "wren-58", Target = "Wren 58", SpectralType = "G8 V", Seed = 5821,
             RightAscensionDegrees = 163.5542, DeclinationDegrees = 7.8815,
             StartMinutes = 205.0, ExposureSeconds = 300, SignalToNoise = 12,
-            Stars = [Dwarf(-38.17, 5450, 2.0, 0.8)],
+            Stars = [Dwarf(-38.17, 5450, 2.0, 1.5)],
         },
         new Exposure
         {
