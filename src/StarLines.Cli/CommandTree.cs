@@ -20,7 +20,13 @@ internal static class CommandTree
         var root = new RootCommand(Description)
         {
             InspectCommand.Create(terminal, provenance),
+            ConvertCommand.Create(terminal, provenance),
+            NormalizeCommand.Create(terminal, provenance),
+            MeasureCommand.Create(terminal, provenance),
+            VelocityCommand.Create(terminal, provenance),
             BarycentreCommand.Create(terminal, provenance),
+            LinesCommand.Create(terminal, provenance),
+            PlotCommand.Create(terminal, provenance),
             CompletionCommand.Create(terminal),
         };
         new CommonOptions().AddTo(root);

@@ -1,5 +1,6 @@
 using System.Collections.Generic;
 using System.CommandLine;
+using StarLines.Velocities.Barycentre;
 using StarLines.Velocities.Time;
 
 namespace StarLines.Cli.Options;
@@ -15,7 +16,7 @@ internal sealed class PlaceOptions(bool severalTimes = false)
         "--dec", "DEC", "Declination, ICRS, degrees, decimal or DD:MM:SS.", static text => Values.DeclinationDegrees(text));
 
     private readonly Option<ObservingSite?> _site = Make.One<ObservingSite?>(
-        "--site", "SITE", "Observatory by name, or LAT,LON,HEIGHT (degrees, degrees east, metres).", Values.Site);
+        "--site", "SITE", "Observatory by name, or LAT,LON,HEIGHT (degrees, degrees east, metres).", ObservingSites.Parse);
 
     private readonly Option<List<JulianDate>> _times = Make.Many(
         "--time", "UTC", "Mid-exposure, UTC, such as 2024-02-10T03:04:05.6.", UtcTime.Parse, severalTimes);

@@ -66,10 +66,13 @@ internal sealed class ReadingOptions
     /// <summary>The files as they were named.</summary>
     public IReadOnlyList<string> Files(ParseResult parsed) => parsed.GetValue(_files) ?? [];
 
+    /// <summary>The ranges that were given.</summary>
+    public IReadOnlyList<WavelengthRange> Ranges(ParseResult parsed) => parsed.GetValue(_ranges) ?? [];
+
     /// <summary>What the user says about them.</summary>
     public SpectrumReadOptions From(ParseResult parsed) => new()
     {
-        Ranges = parsed.GetValue(_ranges) ?? [],
+        Ranges = Ranges(parsed),
         Medium = parsed.GetValue(_medium),
         Frame = parsed.GetValue(_frame),
         AxisUnit = parsed.GetValue(_axisUnit) ?? "",

@@ -58,25 +58,6 @@ internal static class Values
             : throw new FormatException($"The declination '{text}' is not within -90 to 90 degrees.");
     }
 
-    /// <summary>An observatory as <c>LAT,LON,HEIGHT</c>.</summary>
-    public static ObservingSite Site(string text)
-    {
-        string[] parts = text.Split(',', StringSplitOptions.TrimEntries);
-        if (parts.Length != 3)
-        {
-            throw new FormatException($"'{text}' is no site; write LAT,LON,HEIGHT (degrees, degrees east, metres), such as 46.2083,12.3417,1180.");
-        }
-
-        try
-        {
-            return new ObservingSite("", Number(parts[0]), Number(parts[1]), Number(parts[2]));
-        }
-        catch (ArgumentException problem)
-        {
-            throw new FormatException($"'{text}' is no place on the Earth: {problem.Message}", problem);
-        }
-    }
-
     /// <summary>One of a few words, told apart without case.</summary>
     public static T Word<T>(string text, params (string Word, T Value)[] words)
     {

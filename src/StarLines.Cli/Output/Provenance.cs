@@ -61,15 +61,33 @@ internal sealed class Provenance
         _inputs.Add((path, sha256));
     }
 
-    /// <summary>Adds a line list that was used.</summary>
-    public void AddList(LineList list) => _lists.Add((list.Name, list.Sha256));
+    /// <summary>Adds a line list that was used, once.</summary>
+    public void AddList(LineList list)
+    {
+        if (!_lists.Contains((list.Name, list.Sha256)))
+        {
+            _lists.Add((list.Name, list.Sha256));
+        }
+    }
+
+    /// <summary>The making of a spectrum in a few lines.</summary>
+    /// <param name="source">The spectrum it was made from.</param>
+    public IReadOnlyList<string> History(string source)
+    {
+        AddInput(source);
+        string path = File.Exists(source) ? source : source.Split('#')[0];
+        string sha256 = _inputs.Find(input => input.Name == path).Sha256;
+        var lines = new List<string> { $"StarLines {Version}: {_commandLine}", "Date (UTC): " + NowIso() };
+        lines.Add(sha256.Length == 0 ? $"Input: {source}" : $"Input: {source}, SHA-256 {sha256}");
+        return lines;
+    }
 
     /// <summary>Writes everything into the metadata of a table.</summary>
     public void WriteTo(TableMetadata metadata)
     {
         metadata["program"] = "StarLines " + Version;
         metadata["command_line"] = _commandLine;
-        metadata["date_utc"] = Now().ToString("yyyy-MM-dd'T'HH:mm:ss'Z'", CultureInfo.InvariantCulture);
+        metadata["date_utc"] = NowIso();
         if (_inputs.Count != 0)
         {
             metadata["inputs"] = MetadataValue.FromList(_inputs.ConvertAll(static input => Entry("file", input)));
@@ -80,6 +98,8 @@ internal sealed class Provenance
             metadata["line_lists"] = MetadataValue.FromList(_lists.ConvertAll(static list => Entry("name", list)));
         }
     }
+
+    private static string NowIso() => Now().ToString("yyyy-MM-dd'T'HH:mm:ss'Z'", CultureInfo.InvariantCulture);
 
     private static DateTime Now()
     {

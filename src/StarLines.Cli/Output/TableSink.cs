@@ -1,4 +1,5 @@
 using System.IO;
+using StarLines.IO;
 using StarLines.Tables;
 
 namespace StarLines.Cli.Output;
@@ -29,6 +30,12 @@ internal sealed class TableSink(Terminal terminal, string? path, OutputFormat fo
 
     private void WriteTo(Table table, Stream stream)
     {
+        if (format == OutputFormat.Fits)
+        {
+            FitsTableMapping.Write(table, stream);
+            return;
+        }
+
         TableFormat plain = format switch
         {
             OutputFormat.Ecsv => TableFormat.Ecsv,
