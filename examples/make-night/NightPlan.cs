@@ -13,17 +13,17 @@ internal static class NightPlan
             Name = "wren-12", Target = "Wren 12", SpectralType = "A2 V", Seed = 1201,
             RightAscensionDegrees = 96.2245, DeclinationDegrees = 31.5871,
             StartMinutes = 12.5, ExposureSeconds = 600, SignalToNoise = 140,
-            Stars = [Dwarf(-14.62, 8900, 42.0, 28.0)],
+            Stars = [Dwarf(-14.62, 8900, 18.0, 28.0)],
         },
         new Exposure
         {
             Name = "wren-31", Target = "Wren 31", SpectralType = "F6 V + G1 V", Seed = 3107,
             RightAscensionDegrees = 118.9103, DeclinationDegrees = 18.0426,
-            StartMinutes = 55.0, ExposureSeconds = 1200, SignalToNoise = 120,
+            StartMinutes = 55.0, ExposureSeconds = 1200, SignalToNoise = 150,
             Stars =
             [
-                Dwarf(62.35, 6350, 9.0, 6.0) with { Share = 0.62 },
-                Dwarf(-51.80, 5950, 6.0, 3.0) with { Share = 0.38 },
+                Dwarf(62.35, 6250, 7.0, 5.0) with { Share = 0.56 },
+                Dwarf(-51.80, 5900, 5.0, 3.0) with { Share = 0.44 },
             ],
         },
         new Exposure
