@@ -52,7 +52,7 @@ internal static class NightPlan
             Name = "wren-90", Target = "Wren 90", SpectralType = "M1 Ve", Seed = 9033,
             RightAscensionDegrees = 210.6127, DeclinationDegrees = 23.4158,
             StartMinutes = 355.0, ExposureSeconds = 2400, SignalToNoise = 60,
-            Stars = [Dwarf(-71.26, 3750, 8.0, 0.05) with { SurfaceGravityLog = 4.8, Emission = 1.4, Bands = 0.35 }],
+            Stars = [Dwarf(-71.26, 3750, 8.0, 0.05) with { SurfaceGravityLog = 4.8, Emission = 1.4, Bands = 0.12 }],
         },
     ];
 

@@ -65,7 +65,8 @@ internal sealed class NightWriter(string folder, LineList metals, LineList balme
             _stars.Add((exposure, star, s + 1, correction.CorrectionKmPerS));
         }
 
-        if (exposure.Stars.Count == 1)
+        // In bands and in the light of two stars the width of one line has no meaning of its own.
+        if (exposure.Stars is [{ Bands: 0.0 }])
         {
             AddTruthLines(exposure);
         }

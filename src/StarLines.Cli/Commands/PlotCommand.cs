@@ -84,13 +84,31 @@ internal static class PlotCommand
         };
     }
 
+    private static List<LinePanel> Panels(AnalysisResult result, IReadOnlyList<SpectrumView> views)
+    {
+        var panels = new List<LinePanel>();
+        foreach (LinePanel panel in LinePanel.FromMeasurements(result.Spectrum, result.Continuum, result.Lines!))
+        {
+            foreach (SpectrumView view in views)
+            {
+                if (view.Range is not { } range || range.Contains(panel.CentreAngstrom))
+                {
+                    panels.Add(panel);
+                    break;
+                }
+            }
+        }
+
+        return panels;
+    }
+
     private static List<Figure> Draw(AnalysisResult result, Kind what, IReadOnlyList<SpectrumView> views)
     {
         var figures = new List<Figure>();
         switch (what)
         {
             case Kind.Lines:
-                figures.AddRange(LineFigure.FromMeasurements(result.Spectrum, result.Continuum, result.Lines!));
+                figures.AddRange(LineFigure.Pages(Panels(result, views), result.Spectrum.Metadata.Target));
                 break;
             case Kind.Correlation:
                 if (CorrelationFigure.FromResults(result.Spectrum, result.Velocities) is { } correlation)
