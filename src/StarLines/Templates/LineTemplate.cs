@@ -2,6 +2,7 @@ using System;
 using System.Collections.Generic;
 using StarLines.Continuum;
 using StarLines.LineLists;
+using StarLines.Noise;
 using StarLines.Velocities;
 
 namespace StarLines.Templates;
@@ -78,7 +79,7 @@ public sealed class LineTemplate
     }
 
     /// <summary>Makes a template of a spectrum, for instance the best exposure of a star against which to measure the others.</summary>
-    /// <param name="spectrum">The spectrum; flagged pixels count as continuum.</param>
+    /// <param name="spectrum">The spectrum; flagged pixels count as continuum, and without uncertainties its noise is estimated from the flux.</param>
     /// <param name="continuum">Its continuum.</param>
     /// <param name="velocityKmPerS">Velocity of the star in the frame of the spectrum, km/s: it is taken to rest by it.</param>
     /// <param name="name">Name of the template.</param>
@@ -88,6 +89,11 @@ public sealed class LineTemplate
         ArgumentNullException.ThrowIfNull(continuum);
         ArgumentNullException.ThrowIfNull(name);
         Guard.SameLength(continuum.Count, spectrum.Count, nameof(continuum));
+        if (!spectrum.HasSigma)
+        {
+            spectrum = spectrum.WithSigma(NoiseEstimator.EstimatePerPixel(spectrum));
+        }
+
         var rest = new SpectrumProfile(spectrum, continuum, Math.Log(Doppler.Factor(velocityKmPerS)));
         return new LineTemplate(name, Medium.Vacuum, [], widthsKnown: true, rest, fromAir: null);
     }

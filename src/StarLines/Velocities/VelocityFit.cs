@@ -20,7 +20,7 @@ internal sealed partial class VelocityFit
     private const int FewestIterations = 2;
 
     /// <summary>No star turns so fast: 250 km/s squared is the variance of v sin i = 530 km/s; instruments of R under 500 are wider.</summary>
-    private const double LargestBroadening = 62_500.0;
+    internal const double LargestBroadening = 62_500.0;
 
     /// <summary>Converged when a step is below this part of the uncertainty: 1 % adds nothing to it.</summary>
     private const double Convergence = 0.01;

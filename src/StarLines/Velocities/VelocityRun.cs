@@ -77,7 +77,7 @@ internal sealed class VelocityRun
         VelocityFit fit = Fit(transform, start, Reach(peak), StartingWidth(peak, transform, narrowest), !_template.WidthsKnown || wider);
 
         // Neither a fit nor a peak with two sides: nothing that could be given an error.
-        if (IsScattered(fit, transform) || (!IsFitted(fit) && double.IsNaN(peak.Width)))
+        if (IsScattered(fit, transform) || IsBoundless(fit, peak) || (!IsFitted(fit) && double.IsNaN(peak.Width)))
         {
             return NoPeak(c, peak);
         }
@@ -94,6 +94,10 @@ internal sealed class VelocityRun
         VelocityResult first = Summarize(c, peak, pair.FirstFit, component: 1, components: 2);
         return first.With(first.Measurement, second);
     }
+
+    /// <summary>Whether a weak peak asks for lines wider than any star's: then bands or a bent continuum were matched, not lines.</summary>
+    private bool IsBoundless(VelocityFit fit, SearchPeak peak) =>
+        fit.Broadening >= VelocityFit.LargestBroadening && peak.Significance < UnboundedFactor * UnboundedFactor * Threshold(peak);
 
     /// <summary>How far the fit may move from the peak: three quarters of its width, or an eighth of the range where it is wider than that.</summary>
     private double Reach(SearchPeak peak) =>
