@@ -71,6 +71,9 @@ public sealed class UnitSuffixRules
         ["Variance"] = "the square of the unit of its value",
         ["Electrons"] = "the unit is the name",
         ["MinimumDepth"] = "in units of the continuum",
+        ["LineModel"] = "in units of the continuum",
+        ["Correlation"] = "a correlation, −1 to 1",
+        ["SignalToNoiseFromFlux"] = "a ratio",
     };
 
     [Fact]

@@ -40,6 +40,16 @@ public sealed class NoiseEstimatorTests
     }
 
     [Fact]
+    public void Runs_of_zeros_are_gaps_and_single_zeros_are_not()
+    {
+        double[] flux = [0, 0, 0, 0, 0, 0, 0, 0, 5, 0, 6, 0, 0, 7, 0, 0, 0, 0, 0, 0, 0, 0, 0];
+        PixelFaults[] found = GapFinder.Find(flux);
+        Assert.Equal(
+            [0, 1, 2, 3, 4, 5, 6, 7, 14, 15, 16, 17, 18, 19, 20, 21, 22],
+            Enumerable.Range(0, flux.Length).Where(i => found[i] != PixelFaults.None));
+    }
+
+    [Fact]
     public void Hits_of_one_pixel_are_found_and_narrow_lines_are_left()
     {
         var random = new Random(11);
