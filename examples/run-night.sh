@@ -1,5 +1,5 @@
 #!/usr/bin/env bash
-# The main job on the invented night: what the files hold, lines, velocities, normalized spectra and figures.
+# The main job on the invented night: what a file holds, then lines, velocities, normalized spectra and figures of all.
 # Usage: examples/run-night.sh [FOLDER]     (results go to FOLDER; default: out/night)
 set -eu
 top=$(cd "$(dirname "${BASH_SOURCE[0]}")/.." && pwd)
@@ -11,15 +11,11 @@ dotnet build src/StarLines.Cli -c Release -v quiet -clp:'ErrorsOnly;NoSummary'
 starlines() { dotnet src/StarLines.Cli/bin/Release/net10.0/starlines.dll "$@"; }
 
 starlines inspect examples/night/wren-47.fits
-starlines velocity examples/night/*.fits --out "$out/velocities.ecsv" --plot "$out/correlation.png"
-starlines measure examples/night/*.fits --lines metals-fgk --lines balmer --out "$out/lines.ecsv"
-starlines normalize examples/night/*.fits --out "$out"
+starlines run examples/night --out "$out"
 starlines plot examples/night/wren-47.fits --lines metals-fgk --lines balmer --range 5150:5460 --out "$out/wren-47.png"
-starlines plot examples/night/wren-90.fits --kind spectrum --out "$out/wren-90.png"
-starlines plot examples/night/wren-76.fits --kind lines --lines metals-fgk --range 5300:5460 --out "$out/wren-76-lines.png"
 
 echo
-echo "Radial velocities, km/s, by the metal lines (none is found in the A star, whose hydrogen lines are in the table):"
+echo "Radial velocities, km/s, by the metal lines (of the A star by hydrogen), a row a star:"
 grep -v '^#' "$out/velocities.ecsv" | awk -F, 'NR == 1 { for (i = 1; i <= NF; i++) column[$i] = i; next }
-    $column["template"] == "metal" && $column["rv"] != "" { printf "  %-8s %8.2f ± %.2f  %s\n", $column["target"], $column["rv"], $column["rv_err"], $column["status"] }'
+    $column["rv"] != "" && $column["template"] == ($column["target"] == "Wren 12" ? "balmer" : "metal") && !seen[$column["target"] $column["component"]]++ { printf "  %-8s %8.2f ± %.2f  %s\n", $column["target"], $column["rv"], $column["rv_err"], $column["status"] }'
 echo "Everything is in $out."

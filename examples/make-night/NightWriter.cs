@@ -44,8 +44,8 @@ internal sealed class NightWriter(string folder, LineList metals, LineList balme
             Observe(exposure);
         }
 
-        WriteTable("truth.ecsv", StarTable());
-        WriteTable("truth-lines.ecsv", LineTable());
+        WriteTable("stars.ecsv", StarTable());
+        WriteTable("lines.ecsv", LineTable());
     }
 
     private void Observe(Exposure exposure)
@@ -228,7 +228,10 @@ internal sealed class NightWriter(string folder, LineList metals, LineList balme
 
     private void WriteTable(string name, Table table)
     {
-        using FileStream stream = File.Create(Path.Combine(folder, name));
+        // Beside the folder of spectra, so that the folder holds nothing else.
+        string truth = Path.TrimEndingDirectorySeparator(folder) + "-truth";
+        Directory.CreateDirectory(truth);
+        using FileStream stream = File.Create(Path.Combine(truth, name));
         TableWriter.Write(table, stream, TableFormat.Ecsv);
         Console.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{name}: {table.RowCount} rows"));
     }

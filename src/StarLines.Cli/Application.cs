@@ -1,6 +1,7 @@
 using System;
 using System.CommandLine;
 using System.IO;
+using StarLines.Cli.Options;
 using StarLines.Cli.Output;
 
 namespace StarLines.Cli;
@@ -14,7 +15,8 @@ internal static class Application
     /// <returns>The exit code.</returns>
     public static int Run(string[] args, Terminal terminal)
     {
-        RootCommand root = CommandTree.Create(terminal, new Provenance(args));
+        var common = new CommonOptions();
+        RootCommand root = CommandTree.Create(terminal, new Provenance(args), common);
         ParseResult parsed = root.Parse(args, new ParserConfiguration { ResponseFileTokenReplacer = null });
         try
         {
@@ -25,6 +27,7 @@ internal static class Application
                 return ExitCode.Usage;
             }
 
+            common.Apply(parsed, terminal);
             int code = parsed.Invoke(new InvocationConfiguration
             {
                 EnableDefaultExceptionHandler = false,

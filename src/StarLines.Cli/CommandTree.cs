@@ -15,7 +15,8 @@ internal static class CommandTree
     /// <summary>Makes the tree.</summary>
     /// <param name="terminal">Where the commands write.</param>
     /// <param name="provenance">What their tables say about their making.</param>
-    public static RootCommand Create(Terminal terminal, Provenance provenance)
+    /// <param name="common">Options of every command.</param>
+    public static RootCommand Create(Terminal terminal, Provenance provenance, CommonOptions common)
     {
         var root = new RootCommand(Description)
         {
@@ -24,12 +25,13 @@ internal static class CommandTree
             NormalizeCommand.Create(terminal, provenance),
             MeasureCommand.Create(terminal, provenance),
             VelocityCommand.Create(terminal, provenance),
+            RunCommand.Create(terminal, provenance),
             BarycentreCommand.Create(terminal, provenance),
             LinesCommand.Create(terminal, provenance),
             PlotCommand.Create(terminal, provenance),
             CompletionCommand.Create(terminal),
         };
-        new CommonOptions().AddTo(root);
+        common.AddTo(root);
         foreach (Option option in root.Options)
         {
             if (option is HelpOption { Action: HelpAction help } asked)

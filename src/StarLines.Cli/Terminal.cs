@@ -77,12 +77,27 @@ internal sealed class Terminal : IDisposable
     /// <summary>Does work of several steps and shows how far it is, on standard error, where a person reads it.</summary>
     /// <param name="what">What is done, such as <c>measuring</c>.</param>
     /// <param name="steps">Number of steps.</param>
-    /// <param name="work">The work; it calls its argument after each step, from any thread.</param>
+    /// <param name="work">The work; it calls its argument after each step.</param>
     public void WithProgress(string what, int steps, Action<Action> work)
     {
-        if (!ErrorIsTerminal || Quiet || steps < 2)
+        if (steps < 2)
         {
             work(static () => { });
+            return;
+        }
+
+        int done = 0;
+        WithPercentage(what, advance => work(() => advance((double)++done / steps)));
+    }
+
+    /// <summary>Does work that tells what part of it is done, and shows that on standard error, where a person reads it.</summary>
+    /// <param name="what">What is done.</param>
+    /// <param name="work">The work; it calls its argument with 0 to 1, from any thread.</param>
+    public void WithPercentage(string what, Action<Action<double>> work)
+    {
+        if (!ErrorIsTerminal || Quiet)
+        {
+            work(static _ => { });
             return;
         }
 
@@ -94,8 +109,8 @@ internal sealed class Terminal : IDisposable
         {
             progress.Start(context =>
             {
-                ProgressTask task = context.AddTask(what, autoStart: true, maxValue: steps);
-                work(() => task.Increment(1));
+                ProgressTask task = context.AddTask(what, autoStart: true, maxValue: 1.0);
+                work(part => task.Value = part);
             });
         }
         finally

@@ -6,6 +6,7 @@ using StarLines.Continuum;
 using StarLines.LineLists;
 using StarLines.Lines;
 using StarLines.Profiles;
+using StarLines.Runs;
 using StarLines.Templates;
 using StarLines.Velocities;
 
@@ -109,6 +110,20 @@ internal sealed class AnalysisSettings
             Measure = new LineMeasureOptions { Profile = parsed.GetValue(_profile), Sampling = parsed.GetValue(_sampling) },
         });
     }
+
+    /// <summary>A plan with what the command line says instead.</summary>
+    public RunPlan Override(ParseResult parsed, RunPlan plan) => plan with
+    {
+        Exclude = parsed.GetValue(_exclude) is { Count: > 0 } exclude ? exclude : plan.Exclude,
+        StiffnessAngstrom = parsed.GetValue(_stiffness) ?? plan.StiffnessAngstrom,
+        FindOutliers = plan.FindOutliers && !parsed.GetValue(_keepOutliers),
+        Templates = parsed.GetValue(_templates) is { Count: > 0 } templates ? templates : plan.Templates,
+        SearchHalfRangeKmPerS = parsed.GetValue(_search) ?? plan.SearchHalfRangeKmPerS,
+        LineLists = parsed.GetValue(_lines) is { Count: > 0 } lines ? lines : plan.LineLists,
+        LineVelocityKmPerS = parsed.GetValue(_velocity) ?? plan.LineVelocityKmPerS,
+        Profile = parsed.GetResult(_profile) is null ? plan.Profile : parsed.GetValue(_profile),
+        Sampling = parsed.GetResult(_sampling) is null ? plan.Sampling : parsed.GetValue(_sampling),
+    };
 
     private VelocityOptions Search(ParseResult parsed)
     {

@@ -7,11 +7,7 @@ namespace StarLines.Cli.Options;
 /// <summary>The files of a command and what the user says about them; what is said here wins over what a file says.</summary>
 internal sealed class ReadingOptions
 {
-    private readonly Argument<string[]> _files = new("FILE")
-    {
-        Description = "FITS, CSV, ECSV or VOTable files, also .gz; FILE#HDU or FILE#HDU:ROW for a part; - for standard input.",
-        Arity = ArgumentArity.OneOrMore,
-    };
+    private readonly Argument<string[]> _files;
 
     private readonly Option<List<WavelengthRange>> _ranges = Make.Many(
         "--range", "A:B", "Use these wavelengths only, Å, in the file's own medium.", Values.Range);
@@ -49,6 +45,19 @@ internal sealed class ReadingOptions
 
     private readonly PlaceOptions _place = new();
 
+    /// <summary>Makes the argument and the options of a command that reads spectra.</summary>
+    public ReadingOptions()
+        : this(new Argument<string[]>("FILE")
+        {
+            Description = "FITS, CSV, ECSV or VOTable files, also .gz; FILE#HDU or FILE#HDU:ROW for a part; - for standard input.",
+            Arity = ArgumentArity.OneOrMore,
+        })
+    {
+    }
+
+    /// <summary>Makes the options with an argument of the command's own.</summary>
+    public ReadingOptions(Argument<string[]> files) => _files = files;
+
     /// <summary>Adds the argument and the options to a command.</summary>
     public void AddTo(Command command)
     {
@@ -70,18 +79,21 @@ internal sealed class ReadingOptions
     public IReadOnlyList<WavelengthRange> Ranges(ParseResult parsed) => parsed.GetValue(_ranges) ?? [];
 
     /// <summary>What the user says about them.</summary>
-    public SpectrumReadOptions From(ParseResult parsed) => new()
+    public SpectrumReadOptions From(ParseResult parsed) => Override(parsed, SpectrumReadOptions.Default);
+
+    /// <summary>Something said before, with what the command line says instead.</summary>
+    public SpectrumReadOptions Override(ParseResult parsed, SpectrumReadOptions said) => said with
     {
-        Ranges = Ranges(parsed),
-        Medium = parsed.GetValue(_medium),
-        Frame = parsed.GetValue(_frame),
-        AxisUnit = parsed.GetValue(_axisUnit) ?? "",
-        Columns = parsed.GetValue(_columns),
-        Target = parsed.GetValue(_target) ?? "",
-        RightAscensionDegrees = _place.RightAscensionDegrees(parsed),
-        DeclinationDegrees = _place.DeclinationDegrees(parsed),
-        Site = _place.Site(parsed),
-        MidExposureUtc = _place.Time(parsed),
-        ResolvingPower = parsed.GetValue(_power),
+        Ranges = Ranges(parsed) is { Count: > 0 } ranges ? ranges : said.Ranges,
+        Medium = parsed.GetValue(_medium) is var medium and not Medium.Unknown ? medium : said.Medium,
+        Frame = parsed.GetValue(_frame) is var frame and not VelocityFrame.Unknown ? frame : said.Frame,
+        AxisUnit = parsed.GetValue(_axisUnit) ?? said.AxisUnit,
+        Columns = parsed.GetValue(_columns) ?? said.Columns,
+        Target = parsed.GetValue(_target) ?? said.Target,
+        RightAscensionDegrees = _place.RightAscensionDegrees(parsed) ?? said.RightAscensionDegrees,
+        DeclinationDegrees = _place.DeclinationDegrees(parsed) ?? said.DeclinationDegrees,
+        Site = _place.Site(parsed) ?? said.Site,
+        MidExposureUtc = _place.Time(parsed) ?? said.MidExposureUtc,
+        ResolvingPower = parsed.GetValue(_power) ?? said.ResolvingPower,
     };
 }

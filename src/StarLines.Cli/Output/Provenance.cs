@@ -6,6 +6,7 @@ using System.IO;
 using System.Reflection;
 using System.Security.Cryptography;
 using StarLines.LineLists;
+using StarLines.Runs;
 using StarLines.Tables;
 
 namespace StarLines.Cli.Output;
@@ -13,12 +14,12 @@ namespace StarLines.Cli.Output;
 /// <summary>What every table says about its making: program, command line, date, inputs and line lists.</summary>
 internal sealed class Provenance
 {
-    /// <summary>Fixes the date for builds that must give the same bytes twice (a convention of reproducible builds).</summary>
-    private const string DateVariable = "SOURCE_DATE_EPOCH";
-
     /// <summary>Characters that no shell takes for its own.</summary>
     private static readonly SearchValues<char> PlainCharacters =
         SearchValues.Create("ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789-+_./,:=@%");
+
+    /// <summary>Options that change no result: two runs that differ in them give the same bytes.</summary>
+    private static readonly string[] Idle = ["--jobs", "--quiet", "--verbose"];
 
     private readonly List<(string Name, string Sha256)> _inputs = [];
     private readonly List<(string Name, string Sha256)> _lists = [];
@@ -29,13 +30,23 @@ internal sealed class Provenance
     public Provenance(IReadOnlyList<string> words)
     {
         var quoted = new List<string>(words.Count + 1) { "starlines" };
-        foreach (string word in words)
+        for (int i = 0; i < words.Count; i++)
         {
+            string word = words[i];
+            if (Array.Exists(Idle, idle => word == idle || word.StartsWith(idle + "=", StringComparison.Ordinal)))
+            {
+                i += word == "--jobs" ? 1 : 0;
+                continue;
+            }
+
             quoted.Add(NeedsQuotes(word) ? "'" + word.Replace("'", "'\\''", StringComparison.Ordinal) + "'" : word);
         }
 
         _commandLine = string.Join(' ', quoted);
     }
+
+    /// <summary>What the tables of a run say about their making.</summary>
+    public RunContext ToRunContext() => new("StarLines " + Version, _commandLine, Now());
 
     /// <summary>Version of the program.</summary>
     public static string Version { get; } =
@@ -101,13 +112,7 @@ internal sealed class Provenance
 
     private static string NowIso() => Now().ToString("yyyy-MM-dd'T'HH:mm:ss'Z'", CultureInfo.InvariantCulture);
 
-    private static DateTime Now()
-    {
-        string? fixedSeconds = Environment.GetEnvironmentVariable(DateVariable);
-        return long.TryParse(fixedSeconds, NumberStyles.None, CultureInfo.InvariantCulture, out long seconds)
-            ? DateTimeOffset.FromUnixTimeSeconds(seconds).UtcDateTime
-            : DateTime.UtcNow;
-    }
+    private static DateTime Now() => RunContext.Now();
 
     private static MetadataValue Entry(string key, (string Name, string Sha256) item)
     {
