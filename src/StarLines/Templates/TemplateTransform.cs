@@ -8,6 +8,8 @@ internal sealed class TemplateTransform
     /// <summary>Blocks of squares: about this many over the grid.</summary>
     private const int BlockCount = 1024;
 
+    private readonly double[] _lobes;
+
     /// <summary>Samples a template on a grid that reaches MaximumLag pixels beyond both ends.</summary>
     internal TemplateTransform(TemplateProfile profile, CorrelationGrid grid)
     {
@@ -37,7 +39,9 @@ internal sealed class TemplateTransform
         }
 
         HasAbsorption = Array.Exists(BlockSquares, static square => square > 0.0);
-        FwhmKmPerS = HasAbsorption ? AutocorrelationFwhm() / Math.Sqrt(2.0) : double.NaN;
+        double[] lobes = HasAbsorption ? Autocorrelation(grid.Fft.Size / 2, static _ => 1.0) : [];
+        FwhmKmPerS = HasAbsorption ? AutocorrelationFwhm(lobes) / Math.Sqrt(2.0) : double.NaN;
+        _lobes = lobes.AsSpan(0, Math.Min(lobes.Length, (2 * grid.MaximumLag) + 4)).ToArray();
     }
 
     /// <summary>What was sampled.</summary>
@@ -71,18 +75,22 @@ internal sealed class TemplateTransform
     internal double FwhmKmPerS { get; }
 
     /// <summary>
-    /// The correlation of the template, widened or not, with a star of the same lines at lag 0: lags 0 to count − 1, 1 at lag 0.
+    /// The correlation of the template, widened or not, with a star of the same lines at lag 0: lags from 0 up to the longest
+    /// that a search meets, 1 at lag 0.
     /// </summary>
-    internal double[] Autocorrelation(int count, double broadening)
+    internal ReadOnlySpan<double> Autocorrelation(double broadening)
     {
+        if (broadening <= 0.0)
+        {
+            return _lobes;
+        }
+
         double sigma = Math.Sqrt(broadening) / (PhysicalConstants.SpeedOfLightKmPerS * Grid.LogStep);
         double exponent = 2.0 * Math.PI * sigma / Grid.Fft.Size;
-        return Autocorrelation(count, k => Math.Exp(-exponent * exponent * k * k));
+        return Autocorrelation(_lobes.Length, k => Math.Exp(-exponent * exponent * k * k));
     }
 
-    /// <summary>The correlation of the template with itself, lags from 0 up, without mean, 1 at lag 0.</summary>
-    internal double[] Autocorrelation(int count) => Autocorrelation(count, static _ => 1.0);
-
+    /// <summary>The correlation of the template with itself, its power changed bin by bin; without mean, 1 at lag 0.</summary>
     private double[] Autocorrelation(int count, Func<double, double> power)
     {
         var re = new double[Grid.Fft.Bins];
@@ -102,9 +110,8 @@ internal sealed class TemplateTransform
         return result;
     }
 
-    private double AutocorrelationFwhm()
+    private double AutocorrelationFwhm(double[] c)
     {
-        double[] c = Autocorrelation(Grid.Fft.Size / 2);
         int right = 1;
         while (right < c.Length - 1 && c[right] > 0.5)
         {

@@ -85,7 +85,7 @@ internal sealed class SecondStar
     /// <summary>The correlation without the first peak and the side lobes that belong to it.</summary>
     private static double[] Subtract(TemplateTransform transform, double[] c, SearchPeak peak, double broadening)
     {
-        double[] lobes = transform.Autocorrelation(c.Length + 2, broadening);
+        ReadOnlySpan<double> lobes = transform.Autocorrelation(broadening);
         var left = new double[c.Length];
         double centre = peak.Lag + (c.Length / 2);
         for (int k = 0; k < c.Length; k++)
