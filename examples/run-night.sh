@@ -7,7 +7,7 @@ out=${1:-$top/out/night}
 mkdir -p "$out"
 cd "$top"
 export DOTNET_NOLOGO=1 DOTNET_CLI_TELEMETRY_OPTOUT=1
-dotnet build src/StarLines.Cli -c Release -v quiet -clp:'ErrorsOnly;NoSummary'
+dotnet build src/StarLines.Cli -c Release -v quiet --nologo -clp:"ErrorsOnly;NoSummary"
 starlines() { dotnet src/StarLines.Cli/bin/Release/net10.0/starlines.dll "$@"; }
 
 starlines inspect examples/night/wren-47.fits
