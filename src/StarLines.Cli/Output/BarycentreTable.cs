@@ -10,8 +10,8 @@ internal static class BarycentreTable
 {
     private static readonly TableMap<BarycentricResult> Map = new TableMap<BarycentricResult>()
         .Text("target", static r => r.Target, "Name of the target", "meta.id;src")
-        .Double("bjd_tdb", static r => r.BarycentricJdTdb.Value, "d", "Barycentric Julian Date of mid-exposure, TDB", "time.epoch", decimals: 9)
-        .Double("jd_utc", static r => r.JdUtc.Value, "d", "Julian Date of mid-exposure, UTC", "time.epoch", decimals: 9)
+        .Double("bjd_tdb", static r => r.BarycentricJdTdb.Value, "d", "Barycentric Julian Date of mid-exposure, TDB", "time.epoch", decimals: 10)
+        .Double("jd_utc", static r => r.JdUtc.Value, "d", "Julian Date of mid-exposure, UTC", "time.epoch", decimals: 10)
         .Double(
             "z_barycentre",
             static r => r.BarycentricRedshift,

@@ -47,7 +47,7 @@ public static class VelocityTable
         .Text("file", static r => r.File, "Spectrum")
         .Text("target", static r => r.Target, "Target")
         .Text("template", static r => r.Measurement.Template, "Template")
-        .Double("bjd_tdb", static r => r.Measurement.BarycentricJdTdb?.Value ?? double.NaN, "d", "Barycentric Julian Date (TDB) of mid-exposure", "time.epoch", decimals: 9)
+        .Double("bjd_tdb", static r => r.Measurement.BarycentricJdTdb?.Value ?? double.NaN, "d", "Barycentric Julian Date (TDB) of mid-exposure", "time.epoch", decimals: 10)
         .Double("rv", static r => r.Measurement.VelocityKmPerS.Value, "km/s", "Barycentric radial velocity", "spect.dopplerVeloc", decimals: 5)
         .Double("rv_err", static r => Uncertainty(r.Measurement), "km/s", "Uncertainty of the velocity: noise, continuum and scatter of the lines", "stat.error;spect.dopplerVeloc", decimals: 5)
         .Double("rv_topocentric", static r => r.Measurement.TopocentricKmPerS, "km/s", "Radial velocity as the telescope saw it", decimals: 5)
