@@ -49,33 +49,34 @@ public sealed class StellarTemplates
     public IReadOnlyList<VelocityResult> Measure(
         Spectrum spectrum, ContinuumFit continuum, IReadOnlyList<string> names, VelocityOptions? options = null)
     {
+        ArgumentNullException.ThrowIfNull(spectrum);
+        ArgumentNullException.ThrowIfNull(continuum);
         ArgumentNullException.ThrowIfNull(names);
-        bool both = names.Contains(BothName);
-        var families = new List<TemplateFamily>();
-        if (both || names.Contains(BalmerName))
-        {
-            families.Add(_balmer);
-        }
-
-        if (both || names.Contains(MetalName))
-        {
-            families.Add(_metal);
-        }
-
-        VelocityResult[] measured = VelocityMeasurer.MeasureFamilies(spectrum, continuum, families, options);
+        VelocityResult balmer = VelocityMeasurer.MeasureFamilies(spectrum, continuum, [_balmer], options)[0];
+        bool metals = names.Contains(MetalName) || names.Contains(BothName);
+        VelocityResult? metal = metals ? MeasureMetal(spectrum, continuum, balmer, options) : null;
         var results = new VelocityResult[names.Count];
         for (int k = 0; k < results.Length; k++)
         {
             results[k] = names[k] switch
             {
-                BothName => VelocityCombiner.Combine(BothName, measured),
-                BalmerName => measured[0],
-                MetalName => measured[^1],
+                BothName => VelocityCombiner.Combine(BothName, [balmer, metal!]),
+                BalmerName => balmer,
+                MetalName => metal!,
                 _ => throw new ArgumentException(
                     $"There is no built-in template {names[k]}; there are {BalmerName}, {MetalName} and {BothName}.", nameof(names)),
             };
         }
 
         return results;
+    }
+
+    private VelocityResult MeasureMetal(
+        Spectrum spectrum, ContinuumFit continuum, VelocityResult balmer, VelocityOptions? options)
+    {
+        Spectrum without = balmer.ObservedKmPerS.HasValue
+            ? spectrum.Excluding(HydrogenMask.Ranges(spectrum, continuum, Lists[0], balmer.ObservedKmPerS.Value))
+            : spectrum;
+        return VelocityMeasurer.MeasureFamilies(without, continuum, [_metal], options)[0];
     }
 }
