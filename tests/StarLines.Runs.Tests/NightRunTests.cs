@@ -6,7 +6,7 @@ using Xunit;
 
 namespace StarLines.Runs.Tests;
 
-/// <summary>The invented night of <c>examples/night</c>, whose generator wrote the truth beside it.</summary>
+/// <summary>The invented night of <c>examples/night</c>, whose generator wrote the truth to <c>examples/night-truth</c>.</summary>
 public class NightRunTests
 {
     [Fact]
@@ -26,7 +26,7 @@ public class NightRunTests
             plan, new RunContext("StarLines test", "", RunContext.Now()), null, TestContext.Current.CancellationToken);
         Assert.Equal((6, 0), (outcome.Inputs, outcome.Failed));
 
-        Table truth = Read(Path.Combine(night, "truth.ecsv"));
+        Table truth = Read(Path.Combine(night + "-truth", "stars.ecsv"));
         Table found = Read(folder["out", "velocities.ecsv"]);
         var velocities = new Dictionary<(string, long), Measured>();
         var corrections = new Dictionary<string, double>();

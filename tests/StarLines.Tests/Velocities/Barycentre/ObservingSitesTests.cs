@@ -1,7 +1,7 @@
 using System;
 using System.Linq;
-using StarLines.TestSupport;
 using StarLines.Tests.Velocities.Reference;
+using StarLines.TestSupport;
 using StarLines.Velocities.Barycentre;
 using Xunit;
 
