@@ -18,6 +18,9 @@ internal static class LineResults
     /// <summary>Depth from which a line may be saturated; the core must also come within two standard deviations of zero.</summary>
     private const double SaturatedDepth = 0.9;
 
+    /// <summary>A pixel mean may be this much shallower than the narrowest profile; noise comes on top.</summary>
+    private const double DeepestOverData = 2.5;
+
     internal static LineMeasurementSet Collect(
         LineTask[] tasks, NormalizedPixels pixels, LineList list, LineMeasureOptions options, string profile)
     {
@@ -26,6 +29,7 @@ internal static class LineResults
         for (int i = 0; i < tasks.Length; i++)
         {
             LineTask task = tasks[i];
+            RefuseDegenerate(task, pixels);
             Warn(task, pixels, options);
             lines[i] = ToMeasurement(task, pixels, list.Medium, profile);
             windows[i] = task.Usable ? new LineWindow(task.First, task.Last, task.Continuum) : LineWindow.None;
@@ -52,6 +56,31 @@ internal static class LineResults
         }
 
         task.Warnings |= added;
+    }
+
+    private static void RefuseDegenerate(LineTask task, NormalizedPixels pixels)
+    {
+        if (task.Status != LineStatus.Measured || task.Blend == 0 || (task.Warnings & LineWarnings.Edge) != 0)
+        {
+            return;
+        }
+
+        double largest = 0.0;
+        double noise = 0.0;
+        for (int i = Math.Max(0, task.First); i <= Math.Min(task.Last, pixels.Count - 1); i++)
+        {
+            if (pixels.IsUsed(i) && Math.Abs(1.0 - pixels.Flux[i]) > largest)
+            {
+                largest = Math.Abs(1.0 - pixels.Flux[i]);
+                noise = 1.0 / pixels.Weight[i];
+            }
+        }
+
+        if (Math.Abs(task.Depth) > DeepestOverData * (largest + (3.0 * noise)))
+        {
+            task.Status = LineStatus.Failed;
+            task.Warnings |= LineWarnings.Degenerate;
+        }
     }
 
     private static bool IsSaturated(LineTask task, NormalizedPixels pixels)

@@ -53,4 +53,10 @@ public enum LineWarnings
     /// no longer show two minima; only the sum of both is well determined.
     /// </summary>
     Unresolved = 8192,
+
+    /// <summary>
+    /// <c>degenerate</c>: the fitted profile is far deeper than anything the data show, because neighbours of opposite sign
+    /// cancel it; the line has no numbers. Take one of the lines out of the list.
+    /// </summary>
+    Degenerate = 16384,
 }

@@ -20,6 +20,7 @@ public static class LineWords
         (LineWarnings.MethodsDisagree, "methods-disagree"),
         (LineWarnings.AtBound, "at-bound"),
         (LineWarnings.NoConvergence, "no-convergence"),
+        (LineWarnings.Degenerate, "degenerate"),
         (LineWarnings.NoiseFromFlux, "noise-from-flux"),
         (LineWarnings.MediumAssumed, "medium-assumed"),
     ];
