@@ -22,6 +22,9 @@ public sealed class StellarTemplates
     /// <summary>Name of the combination of both.</summary>
     public const string BothName = "both";
 
+    // The weakest right peak among survey spectra of stars down to K3 is 0.14; common practice, no source.
+    private const double WeakestBalmerPeak = 0.1;
+
     private readonly TemplateFamily _balmer;
     private readonly TemplateFamily _metal;
 
@@ -52,7 +55,7 @@ public sealed class StellarTemplates
         ArgumentNullException.ThrowIfNull(spectrum);
         ArgumentNullException.ThrowIfNull(continuum);
         ArgumentNullException.ThrowIfNull(names);
-        VelocityResult balmer = VelocityMeasurer.MeasureFamilies(spectrum, continuum, [_balmer], options)[0];
+        VelocityResult balmer = WithoutWeakPeak(VelocityMeasurer.MeasureFamilies(spectrum, continuum, [_balmer], options)[0]);
         bool metals = names.Contains(MetalName) || names.Contains(BothName);
         VelocityResult? metal = metals ? MeasureMetal(spectrum, continuum, balmer, options) : null;
         var results = new VelocityResult[names.Count];
@@ -70,6 +73,13 @@ public sealed class StellarTemplates
 
         return results;
     }
+
+    // A few broad lines match the bands of a cool star somewhere within the search; real hydrogen stands out.
+    private static VelocityResult WithoutWeakPeak(VelocityResult balmer) =>
+        balmer.Measurement.PeakHeight < WeakestBalmerPeak
+            ? VelocityMeasurer.Nothing(BalmerName, VelocityStatus.NoPeak, new Remark(
+                "weak-peak", "The hydrogen lines match the spectrum too weakly to give a velocity."))
+            : balmer;
 
     private VelocityResult MeasureMetal(
         Spectrum spectrum, ContinuumFit continuum, VelocityResult balmer, VelocityOptions? options)
