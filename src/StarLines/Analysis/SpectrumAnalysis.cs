@@ -10,8 +10,9 @@ namespace StarLines.Analysis;
 /// <summary>The main job on one spectrum: noise, continuum, velocities, lines, and the continuum again without the lines.</summary>
 public static class SpectrumAnalysis
 {
-    // The continuum has settled when its level moves by less than this part of its own uncertainty.
-    private const double Settled = 0.1;
+    // The lines are measured anew after each move of the level. A move of less than this part of its own uncertainty is
+    // the last: the next one would be some ten times smaller.
+    private const double Settled = 0.5;
 
     /// <summary>Measures a spectrum.</summary>
     /// <param name="spectrum">The spectrum as read.</param>
@@ -129,7 +130,7 @@ public static class SpectrumAnalysis
         for (int round = 0; round < options.ContinuumRounds; round++)
         {
             ContinuumFit refined = ContinuumFitter.Refine(result.Spectrum, continuum, lines.Model);
-            double moved = LargestMove(continuum, refined);
+            double moved = Move(continuum, refined);
             continuum = refined;
             lines = LineMeasurer.Measure(result.Spectrum, continuum, options.Lines!, measure);
             if (moved < Settled)
@@ -158,18 +159,16 @@ public static class SpectrumAnalysis
         return best;
     }
 
-    private static double LargestMove(ContinuumFit before, ContinuumFit after)
+    // The root mean square move in units of the uncertainty of the level.
+    private static double Move(ContinuumFit before, ContinuumFit after)
     {
-        double largest = 0.0;
+        double sum = 0.0;
         for (int i = 0; i < before.Count; i++)
         {
-            double move = Math.Abs(after.Level[i] - before.Level[i]);
-            if (move > largest * after.Sigma[i])
-            {
-                largest = move / after.Sigma[i];
-            }
+            double move = (after.Level[i] - before.Level[i]) / after.Sigma[i];
+            sum += double.IsFinite(move) ? move * move : 0.0;
         }
 
-        return largest;
+        return Math.Sqrt(sum / before.Count);
     }
 }

@@ -32,10 +32,10 @@ public static class ContinuumFitter
     private const double FreedomCost = 3.0;
 
     // While the stiffness is chosen this many pixels are enough.
-    private const int SearchPixels = 2500;
+    private const int SearchPixels = 1600;
     private const int FirstSteps = 9;
     private const int PlainSteps = 3;
-    private const int StepsPerCandidate = 3;
+    private const int StepsPerCandidate = 2;
     private const int MostFinalSteps = 5;
 
     // The level has settled when a step moves it by less than this part of its own uncertainty.
