@@ -22,8 +22,13 @@ public sealed class StellarTemplates
     /// <summary>Name of the combination of both.</summary>
     public const string BothName = "both";
 
-    // The weakest right peak among survey spectra of stars down to K3 is 0.14; common practice, no source.
-    private const double WeakestBalmerPeak = 0.1;
+    // Hydrogen of stars down to K3 in survey spectra gives peaks of 0.16 and more, a wrong match up to 0.14; common
+    // practice, no source.
+    private const double WeakestBalmerPeak = 0.15;
+
+    // Where hydrogen is this plain, metals of the same star or of its companion are not farther off than this.
+    private const double PlainBalmerPeak = 0.5;
+    private const double FarthestMetalKmPerS = 400.0;
 
     private readonly TemplateFamily _balmer;
     private readonly TemplateFamily _metal;
@@ -87,6 +92,11 @@ public sealed class StellarTemplates
         Spectrum without = balmer.ObservedKmPerS.HasValue
             ? spectrum.Excluding(HydrogenMask.Ranges(spectrum, continuum, Lists[0], balmer.ObservedKmPerS.Value))
             : spectrum;
-        return VelocityMeasurer.MeasureFamilies(without, continuum, [_metal], options)[0];
+        VelocityResult metal = VelocityMeasurer.MeasureFamilies(without, continuum, [_metal], options)[0];
+        double apart = Math.Abs(metal.ObservedKmPerS.Value - balmer.ObservedKmPerS.Value);
+        return balmer.Measurement.PeakHeight > PlainBalmerPeak && apart > FarthestMetalKmPerS
+            ? VelocityMeasurer.Nothing(MetalName, VelocityStatus.NoPeak, new Remark(
+                "far-from-hydrogen", "The best match of the metal lines lies over 400 km/s from plain hydrogen lines: it is chance."))
+            : metal;
     }
 }
