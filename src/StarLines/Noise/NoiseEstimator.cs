@@ -1,4 +1,5 @@
 using System;
+using StarLines.Numerics;
 
 namespace StarLines.Noise;
 
@@ -46,12 +47,17 @@ public static class NoiseEstimator
         int count = spectrum.Count;
         int blocks = Math.Max(1, (int)Math.Round(count / (double)BlockPixels));
         var noise = new double[blocks];
-        double whole = Estimate(spectrum.Flux, spectrum.Faults);
+        double whole = double.NaN;
         for (int b = 0; b < blocks; b++)
         {
             int start = (int)((long)count * b / blocks);
             int end = (int)((long)count * (b + 1) / blocks);
             double block = Estimate(spectrum.Flux[start..end], spectrum.Faults[start..end]);
+            if (!(block > 0.0) && double.IsNaN(whole))
+            {
+                whole = Estimate(spectrum.Flux, spectrum.Faults);
+            }
+
             noise[b] = block > 0.0 ? block : whole;
         }
 
@@ -75,8 +81,14 @@ public static class NoiseEstimator
 
     private static double Median(Span<double> values)
     {
-        values.Sort();
         int middle = values.Length / 2;
-        return values.Length % 2 == 1 ? values[middle] : 0.5 * (values[middle - 1] + values[middle]);
+        double upper = Selection.Smallest(values, middle);
+        if (values.Length % 2 == 1)
+        {
+            return upper;
+        }
+
+        // What selection leaves below the middle holds the value just before it.
+        return 0.5 * (upper + System.Numerics.Tensors.TensorPrimitives.Max<double>(values[..middle]));
     }
 }
