@@ -10,7 +10,7 @@ REACH = 0.15          # angstrom within which a neighbour counts
 NEIGHBOURS = 0.12     # of the line's strength that all neighbours may have together
 AGREEMENT = 0.01      # angstrom between observed and Ritz wavelength
 PER_STEP = 9          # lines taken from each 100 angstrom, the strongest first
-WEAKEST = 2.6         # dex below the strongest hundred lines: about 10 mA in the Sun
+WEAKEST = 2.6         # dex below the hundredth strongest line of the pool; set by eye, not calibrated against widths
 LOG_GF_OF_WIDTHS = "log gf of the paper"
 
 # Wings of hydrogen and Ca II H and K, the CH band, and bands of telluric oxygen and water.

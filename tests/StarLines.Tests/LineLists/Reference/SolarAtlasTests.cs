@@ -28,7 +28,8 @@ public class SolarAtlasTests
         Assert.True(cores.Count > 90, $"Only {cores.Count} lines lie in the pieces of the atlas.");
         Assert.All(cores, core => Assert.True(core.Depth > 0.05, $"{core.Name}: depth {core.Depth}"));
 
-        // Convection moves cores to the blue by up to 0.6 km/s in weak lines and hardly in strong ones; the Ca II triplet forms above it.
+        // Convection moves cores to the blue by some tenths of a km/s, weak lines more than strong ones (common practice, no source).
+        // The limits were set around what the lists gave, so this guards against gross errors and changes rather than proving the zero point.
         Assert.InRange(Median(cores.Select(core => core.KmPerS)), -0.45, -0.15);
         Assert.InRange(1.4826 * Median(cores.Select(core => Math.Abs(core.KmPerS + 0.3))), 0.0, 0.25);
         Assert.All(cores, core => Assert.True(core.KmPerS is > -0.95 and < 0.5, $"{core.Name}: {core.KmPerS} km/s"));
