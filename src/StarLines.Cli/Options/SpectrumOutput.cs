@@ -4,6 +4,7 @@ using System.CommandLine;
 using System.IO;
 using StarLines.Cli.Output;
 using StarLines.IO;
+using StarLines.Runs.Output;
 
 namespace StarLines.Cli.Options;
 

@@ -2,6 +2,7 @@ using System.Collections.Generic;
 using System.Globalization;
 using System.IO;
 using StarLines.Plotting;
+using StarLines.Runs.Output;
 
 namespace StarLines.Cli.Output;
 

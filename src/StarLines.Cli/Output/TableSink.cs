@@ -1,5 +1,6 @@
 using System.IO;
 using StarLines.IO;
+using StarLines.Runs.Output;
 using StarLines.Tables;
 
 namespace StarLines.Cli.Output;

@@ -3,7 +3,7 @@ using System.IO;
 
 namespace StarLines.Runs.Output;
 
-/// <summary>Writes a file beside its place and moves it there when it is whole.</summary>
+/// <summary>Writes a file beside its place and moves it there when it is whole, so that nobody meets half a file.</summary>
 internal static class AtomicFile
 {
     /// <summary>Writes a file; its folder is made, an old file is replaced, and a failure leaves nothing.</summary>

@@ -74,15 +74,6 @@ internal sealed class PenalizedSpline
         return interval;
     }
 
-    /// <summary>The spline at an abscissa.</summary>
-    internal double Evaluate(double x)
-    {
-        int j = Locate(x, out double t);
-        Basis(t, out double b0, out double b1, out double b2, out double b3);
-        double[] c = Coefficients;
-        return (b0 * c[j]) + (b1 * c[j + 1]) + (b2 * c[j + 2]) + (b3 * c[j + 3]);
-    }
-
     /// <summary>Forgets what was accumulated.</summary>
     internal void Clear()
     {
